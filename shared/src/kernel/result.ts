@@ -9,9 +9,6 @@ export function granted<Granted>(value: Granted): Verdict<Granted, never> {
 }
 
 /** A refused verdict. There is always at least one reason. */
-export function refused<Reason>(
-  first: Reason,
-  ...rest: readonly Reason[]
-): Verdict<never, Reason> {
+export function refused<Reason>(first: Reason, ...rest: readonly Reason[]): Verdict<never, Reason> {
   return { isGranted: false, reasons: [first, ...rest] };
 }

@@ -1,0 +1,44 @@
+import type { Read } from '#backend/database/transaction.ts';
+import type { ShoreId } from '#shared/kernel/ids.ts';
+import type { ClockTime } from '#shared/kernel/time.ts';
+
+/** A shore with its settings; heights above the chart datum of its tide station, in metres. */
+export interface Shore {
+  readonly id: ShoreId;
+  readonly name: string;
+  readonly zone: string;
+  readonly latitude: number;
+  readonly longitude: number;
+  readonly tideStationId: string;
+  readonly lowestTideM: number;
+  readonly highestTideM: number;
+  readonly workingLevelM: number;
+  readonly cutOffLevelM: number;
+  readonly minutesBeforeLow: number;
+  readonly minutesAfterLow: number;
+  readonly daylightMarginMinutes: number;
+  readonly minimumMinutes: number;
+  readonly earliestClock: ClockTime;
+  readonly latestClock: ClockTime;
+  readonly crewMeetsMinutes: number;
+  readonly partyMeetsMinutes: number;
+  readonly meetingPlace: string;
+}
+
+/** Every shore in the group's order. The first is the home shore. */
+export async function readShores(read: Read): Promise<readonly Shore[]> {
+  const rows: { shore: Shore }[] = await read.query(
+    `SELECT json_build_object(
+         'id', id, 'name', name, 'zone', zone, 'latitude', latitude, 'longitude', longitude,
+         'tideStationId', tide_station_id,
+         'lowestTideM', lowest_tide_m, 'highestTideM', highest_tide_m,
+         'workingLevelM', working_level_m, 'cutOffLevelM', cut_off_level_m,
+         'minutesBeforeLow', minutes_before_low, 'minutesAfterLow', minutes_after_low,
+         'daylightMarginMinutes', daylight_margin_minutes, 'minimumMinutes', minimum_minutes,
+         'earliestClock', earliest_clock, 'latestClock', latest_clock,
+         'crewMeetsMinutes', crew_meets_minutes, 'partyMeetsMinutes', party_meets_minutes,
+         'meetingPlace', meeting_place) AS shore
+       FROM shore ORDER BY position, name`,
+  );
+  return rows.map((row) => row.shore);
+}

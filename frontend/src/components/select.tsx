@@ -1,0 +1,33 @@
+/** One of a few, chosen from a list; its name is spoken and not shown. */
+export function Select(props: {
+  readonly name: string;
+  readonly value: string;
+  readonly choices: readonly { readonly value: string; readonly words: string }[];
+  readonly onChange: (value: string) => void;
+}) {
+  return (
+    <span className="relative inline-flex min-w-0 max-wide:flex-1">
+      <select
+        aria-label={props.name}
+        className="min-h-9 w-full min-w-38 appearance-none truncate rounded-md border-[1.5px] border-edge bg-paper py-1 pr-8 pl-3 text-ui max-wide:min-h-target"
+        value={props.value}
+        onChange={(event) => props.onChange(event.target.value)}
+      >
+        {props.choices.map(({ value, words }) => (
+          <option key={value} value={value}>
+            {words}
+          </option>
+        ))}
+      </select>
+      <svg
+        className="pointer-events-none absolute top-1/2 right-3 -translate-y-1/2"
+        viewBox="0 0 10 5"
+        width="10"
+        height="5"
+        aria-hidden
+      >
+        <path className="fill-ink" d="M0 0H10L5 5Z" />
+      </svg>
+    </span>
+  );
+}

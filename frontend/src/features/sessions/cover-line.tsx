@@ -1,0 +1,38 @@
+import type { ReactNode } from 'react';
+import { LimpetRow } from '#frontend/components/limpet.tsx';
+import type { SessionView } from '#shared/contracts/sessions.ts';
+import type { Cover } from './session-words.ts';
+
+/** The slots of a session as limpets and, after them, in words with figures. */
+export function CoverLine(props: {
+  readonly state: SessionView['state'];
+  readonly hasEnded: boolean;
+  readonly cover: Cover;
+  readonly limpetPx?: number;
+}) {
+  const { state, hasEnded, cover, limpetPx = 14 } = props;
+  if (state === 'stood-down') return <span>Stood down</span>;
+  const isPast = hasEnded || state === 'closed';
+  return (
+    <span className="flex flex-wrap items-center gap-x-1.5">
+      <LimpetRow looks={cover.looks} sizePx={limpetPx} isPast={isPast} />
+      <span>
+        {state === 'draft' && 'Draft, '}
+        {isPast ? 'Done' : openWords(cover)}
+      </span>
+    </span>
+  );
+}
+
+function openWords({ gaps, inDoubt }: Cover): ReactNode {
+  if (gaps === 0 && inDoubt === 0) return 'Covered';
+  return (
+    <>
+      {gaps > 0 && (
+        <b className="whitespace-nowrap text-anemone">{gaps === 1 ? '1 gap' : `${gaps} gaps`}</b>
+      )}
+      {gaps > 0 && inDoubt > 0 && ', '}
+      {inDoubt > 0 && <b className="whitespace-nowrap text-wrack">{inDoubt} in doubt</b>}
+    </>
+  );
+}
