@@ -47,6 +47,12 @@ describe('a tide curve', () => {
     expect(heights[2]?.heightM).toBeCloseTo(2.5, 9);
   });
 
+  it('stands still, with no extremes, where there is no tide', () => {
+    const still = curveOf({ id: 'still', meanLevelM: 1.2, constituents: [] });
+    expect(still.heightAtM(0)).toBe(1.2);
+    expect(still.extremes(0, 365 * DAY_MS)).toEqual([]);
+  });
+
   it('refuses a step that leads nowhere', () => {
     expect(() => curveOf(SOLAR).series(0, DAY_MS, 0)).toThrow(RangeError);
   });
@@ -279,15 +285,15 @@ function expectAlternation(found: readonly TideExtreme[], what: string): void {
 
 function sampledExtremes(curve: TideCurve, fromAt: number, toAt: number): TideExtreme[] {
   const heights = curve.series(fromAt, toAt, 1);
-  return heights.flatMap((here, place) => {
+  return heights.flatMap((here, place): TideExtreme[] => {
     const before = heights[place - 1];
     const after = heights[place + 1];
     if (before === undefined || after === undefined) return [];
     if (here.heightM > before.heightM && here.heightM >= after.heightM) {
-      return [{ ...here, kind: 'high' as const }];
+      return [{ ...here, kind: 'high' }];
     }
     const isLow = here.heightM < before.heightM && here.heightM <= after.heightM;
-    return isLow ? [{ ...here, kind: 'low' as const }] : [];
+    return isLow ? [{ ...here, kind: 'low' }] : [];
   });
 }
 

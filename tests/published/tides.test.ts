@@ -1,7 +1,12 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { tideStations } from '#backend/platform/tides/tide-stations.ts';
-import { constituentNamed, speedDegPerHour } from '#shared/domain/tides/constituents.ts';
+import {
+  constituentNamed,
+  equilibriumArgumentDeg,
+  nodeFactorAt,
+  speedDegPerHour,
+} from '#shared/domain/tides/constituents.ts';
 import { tideCurve } from '#shared/domain/tides/prediction.ts';
 import type { TideStation } from '#shared/domain/tides/prediction.ts';
 import type { TideCurve, TideExtreme } from '#shared/domain/tides/tide-curve.ts';
@@ -130,6 +135,33 @@ describe('the tide at Hove', () => {
     report(`Hove ${time}`, [miss]);
     expect(miss.minutes).toBeLessThan(8);
     expect(miss.heightCm).toBeLessThan(7);
+  });
+});
+
+describe('the equilibrium arguments at Greenwich', () => {
+  it.each([
+    // V0 + u at the beginning of 2017 and of 2027, as computed for the predictor XTide (congen).
+    ['J1', 264.33, 114.06, 0.05],
+    ['K1', 5.26, 16.25, 0.05],
+    ['K2', 191.35, 213.08, 0.05],
+    ['L2', 1.96, 101.09, 0.05],
+    // There with the mean of a ratio that depends on the inclination of the moon's orbit.
+    ['M1', 102.4, 323.67, 0.5],
+    ['M2', 286.18, 167.68, 0.05],
+    ['M3', 69.27, 71.52, 0.05],
+    ['M4', 212.36, 335.37, 0.05],
+  ])('are the published ones for %s', (name, in2017, in2027, within) => {
+    const constituent = constituentNamed(name);
+    if (constituent === undefined) throw new Error(`No constituent ${name}`);
+    for (const [year, expected] of [
+      [2017, in2017],
+      [2027, in2027],
+    ] as const) {
+      const startAt = fromIso(`${year}-01-01T00:00Z`);
+      const { u } = nodeFactorAt(constituent, fromIso(`${year}-07-02T12:00Z`));
+      const argument = equilibriumArgumentDeg(constituent, startAt) + u - expected;
+      expect(Math.abs(((argument + 900) % 360) - 180), `${year}`).toBeLessThan(within);
+    }
   });
 });
 

@@ -3,6 +3,7 @@ import { chownSync, closeSync, existsSync, openSync, readFileSync, renameSync, r
 import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
+import { isAlive } from './alive.ts';
 import type { Account, ClusterHome } from './cluster-home.ts';
 import type { PostgresPrograms } from './find-postgres.ts';
 import { CannotStart } from './say.ts';
@@ -36,7 +37,8 @@ export interface ClusterWish {
 const readyTimeoutMs = 60_000;
 const stopTimeoutMs = 1_500;
 const pollMs = 50;
-const watchMs = 1_000;
+const stopPollMs = 20;
+const watchMs = 500;
 const throwAwayOptions = ['fsync=off', 'synchronous_commit=off', 'full_page_writes=off'];
 
 /**
@@ -92,11 +94,11 @@ function running(port: number, password: string, pid: number, ended: Promise<voi
       isStopping = true;
       if (!isAlive(pid)) return;
       process.kill(pid, 'SIGINT');
-      const late = sleep(stopTimeoutMs, 'late' as const, { ref: false });
-      if ((await Promise.race([ended, late])) !== 'late') return;
+      const untilMs = performance.now() + stopTimeoutMs;
+      while (isAlive(pid) && performance.now() < untilMs) await sleep(stopPollMs);
       // Immediate shutdown; the next start recovers from the write-ahead log.
       if (isAlive(pid)) process.kill(pid, 'SIGQUIT');
-      await ended;
+      while (isAlive(pid)) await sleep(stopPollMs);
     },
   };
 }
@@ -177,9 +179,11 @@ function readLock(folder: string): { readonly pid: number; readonly port: number
   return pid > 0 && port > 0 ? { pid, port } : null;
 }
 
+type Answer = 'ready' | 'not yet' | 'refused';
+
 /** Asks the server on this port whether it takes connections and is that of this folder. */
 function folderCheck(port: number, password: string, folder: string) {
-  return async (): Promise<'ready' | 'not yet'> => {
+  return async (): Promise<Answer> => {
     const client = new pg.Client({
       host: '127.0.0.1',
       port,
@@ -190,9 +194,10 @@ function folderCheck(port: number, password: string, folder: string) {
     try {
       await client.connect();
       const answer = await client.query<{ data_directory: string }>('SHOW data_directory');
-      return answer.rows[0]?.data_directory === folder ? 'ready' : 'not yet';
+      return answer.rows[0]?.data_directory === folder ? 'ready' : 'refused';
     } catch (error) {
-      if (isNotYet(error)) return 'not yet';
+      if (isOneOf(error, notYetCodes)) return 'not yet';
+      if (isOneOf(error, wrongPasswordCodes)) return 'refused';
       throw error;
     } finally {
       await client.end();
@@ -200,18 +205,27 @@ function folderCheck(port: number, password: string, folder: string) {
   };
 }
 
-/** Nobody listens yet, the server is starting or ending, or the port is another server's. */
-function isNotYet(error: unknown): boolean {
-  const code: unknown = error instanceof Error ? Reflect.get(error, 'code') : null;
-  return ['ECONNREFUSED', 'ECONNRESET', '57P03', '57P01', '28P01', '28000'].includes(String(code));
+// Nobody listens yet, or the server is starting or ending.
+const notYetCodes = ['ECONNREFUSED', 'ECONNRESET', '57P03', '57P01'];
+const wrongPasswordCodes = ['28P01', '28000'];
+
+function isOneOf(error: unknown, codes: readonly string[]): boolean {
+  return error instanceof Error && codes.includes(String(Reflect.get(error, 'code')));
 }
 
 async function untilReady(
-  check: () => Promise<'ready' | 'not yet'>,
+  check: () => Promise<Answer>,
   throwIfGone: () => void,
 ): Promise<void> {
   const untilMs = performance.now() + readyTimeoutMs;
-  while ((await check()) !== 'ready') {
+  for (;;) {
+    const answer = await check();
+    if (answer === 'ready') return;
+    if (answer === 'refused') {
+      throw new CannotStart(
+        'The database does not take the password in secrets.json. Bring the right file back, or remove the data folder to begin anew.',
+      );
+    }
     throwIfGone();
     if (performance.now() > untilMs) throw new CannotStart('PostgreSQL does not answer.');
     await sleep(pollMs);
@@ -220,15 +234,6 @@ async function untilReady(
 
 async function goneByPid(pid: number): Promise<void> {
   while (isAlive(pid)) await sleep(watchMs, undefined, { ref: false });
-}
-
-function isAlive(pid: number): boolean {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch (error) {
-    return error instanceof Error && Reflect.get(error, 'code') === 'EPERM';
-  }
 }
 
 function lastLines(file: string): string {

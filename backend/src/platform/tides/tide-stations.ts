@@ -1,3 +1,4 @@
+import type * as TideDatabase from '@neaps/tide-database';
 import type { Station } from '@neaps/tide-database';
 import type { TideDifferences } from '#shared/domain/tides/differences.ts';
 import { tideCurve } from '#shared/domain/tides/prediction.ts';
@@ -8,6 +9,7 @@ import type {
 } from '#shared/domain/tides/prediction.ts';
 import { granted, refused } from '#shared/kernel/result.ts';
 import type { Verdict } from '#shared/kernel/result.ts';
+import { greenwichPhaseDeg } from './greenwich-phase.ts';
 
 /** A tide station as it is offered to choose from. */
 export interface StationFacts {
@@ -65,22 +67,8 @@ export interface TideStations {
   ) => Promise<StationNearby[]>;
 }
 
-type Database = typeof import('@neaps/tide-database');
+type Database = typeof TideDatabase;
 type Offsets = NonNullable<Station['offsets']>;
-
-/**
- * TICON-4 counts the phases of a few constituents from other arguments than NOAA Special
- * Publication 98; degrees to add to its phases. Found by setting its stations beside the same
- * gauges as NOAA and the Norwegian Mapping Authority analysed them (2MK5 and SGM at Norwegian
- * ports, M1, 2MK5 and 2MO5 at Anchorage): 90 are the constant of the diurnal part left out, 180
- * its sign, and 20.3 half a year's motion of the moon's perigee, which NOAA's M1 leaves out.
- */
-const TICON_PHASE_DEG: Readonly<Record<string, number>> = {
-  M1: 110.3,
-  '2MK5': 90,
-  '2MO5': -90,
-  SGM: 180,
-};
 
 /**
  * Tide stations from the open tide database, 31 MB that are read at the first question (0.7 s and
@@ -149,12 +137,11 @@ function summaryOf(station: Station): StationFacts {
   };
 }
 
-function constituentsOf(station: Station): StationConstituent[] {
-  const isTicon = station.source.name === 'TICON-4';
-  return station.harmonic_constituents.map(({ name, amplitude, phase }) => ({
+function constituentsOf({ source, harmonic_constituents }: Station): StationConstituent[] {
+  return harmonic_constituents.map(({ name, amplitude, phase }) => ({
     name,
     amplitudeM: amplitude,
-    phaseDeg: isTicon ? phase + (TICON_PHASE_DEG[name] ?? 0) : phase,
+    phaseDeg: greenwichPhaseDeg(source.name, name, phase),
   }));
 }
 

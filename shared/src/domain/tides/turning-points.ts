@@ -52,6 +52,8 @@ function search(
   const middleAt = (left.at + right.at) / 2;
   const middle = sum.motionAt(middleAt);
   const jerk = sum.jerkBoundAt(middleAt);
+  // Water without a tide is still, and never turns.
+  if (jerk === 0) return;
   const halfHours = (right.at - left.at) / 2 / HOUR_MS;
   const curvature = Math.abs(middle.curvatureMPerHour2);
   const reach = curvature * halfHours + (jerk * halfHours ** 2) / 2;
