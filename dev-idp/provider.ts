@@ -38,7 +38,9 @@ const longestFormBytes = 4_096;
  */
 export async function startDevIdp(wish: DevIdpWish): Promise<DevIdp> {
   if (process.env['NODE_ENV'] === 'production') {
-    throw new Error('The sign-in stand-in lets anybody in as anybody and refuses to run in production.');
+    throw new Error(
+      'The sign-in stand-in lets anybody in as anybody and refuses to run in production.',
+    );
   }
   const server = createServer();
   await new Promise<void>((resolve, reject) => {
@@ -50,7 +52,9 @@ export async function startDevIdp(wish: DevIdpWish): Promise<DevIdp> {
   const protocol = provider.callback();
   server.on('request', (request, response) => {
     answer(provider, protocol, request, response).catch((error: unknown) => {
-      process.stderr.write(`${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+      process.stderr.write(
+        `${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
+      );
       sendPage(response, 400, (nonce) => errorPage(asProviderError(error), nonce));
     });
   });
@@ -66,13 +70,15 @@ export async function startDevIdp(wish: DevIdpWish): Promise<DevIdp> {
 
 function makeProvider(issuer: string, wish: DevIdpWish): Provider {
   const policy = interactionPolicy.base();
-  policy.get('login')?.checks.add(
-    new interactionPolicy.Check('asks-each-time', 'the stand-in asks at every sign-in', (ctx) =>
-      ctx.oidc.result?.login === undefined
-        ? interactionPolicy.Check.REQUEST_PROMPT
-        : interactionPolicy.Check.NO_NEED_TO_PROMPT,
-    ),
-  );
+  policy
+    .get('login')
+    ?.checks.add(
+      new interactionPolicy.Check('asks-each-time', 'the stand-in asks at every sign-in', (ctx) =>
+        ctx.oidc.result?.login === undefined
+          ? interactionPolicy.Check.REQUEST_PROMPT
+          : interactionPolicy.Check.NO_NEED_TO_PROMPT,
+      ),
+    );
   return new Provider(issuer, {
     clients: [
       {
@@ -176,7 +182,11 @@ function showPage(ctx: KoaContextWithOIDC, write: (nonce: string) => string): vo
   ctx.body = write(nonce);
 }
 
-function sendPage(response: ServerResponse, status: number, write: (nonce: string) => string): void {
+function sendPage(
+  response: ServerResponse,
+  status: number,
+  write: (nonce: string) => string,
+): void {
   if (response.headersSent) {
     response.end();
     return;
@@ -190,7 +200,10 @@ function sendPage(response: ServerResponse, status: number, write: (nonce: strin
   response.end(write(nonce));
 }
 
-function asProviderError(error: unknown): { error: string; error_description?: string | undefined } {
+function asProviderError(error: unknown): {
+  error: string;
+  error_description?: string | undefined;
+} {
   return error instanceof errors.OIDCProviderError ? error : { error: 'server_error' };
 }
 

@@ -9,9 +9,7 @@ export default defineConfig({
   root: fileURLToPath(new URL('.', import.meta.url)),
   plugins: [react(), tailwind()],
   server: {
-    // The application checks the Origin of every write, so it must see the address that the
-    // browser sees and not its own.
-    proxy: { '/api': { target: app, xfwd: true }, '/auth': { target: app, xfwd: true } },
+    proxy: { '/api': app, '/auth': app },
   },
   build: {
     outDir: 'dist',
@@ -28,10 +26,6 @@ export default defineConfig({
               test: /node_modules[\\/](react|react-dom|react-router|scheduler)[\\/]/,
             },
             { name: 'calendar', test: /node_modules[\\/](@fullcalendar|preact)[\\/]/ },
-            {
-              name: 'wire',
-              test: /(node_modules[\\/](zod|dayjs)|shared[\\/]src[\\/](contracts|kernel))[\\/]/,
-            },
           ],
         },
       },

@@ -4,7 +4,6 @@ import '@fontsource/work-sans/latin-600.css';
 import '@fontsource/work-sans/latin-ext-400.css';
 import '@fontsource/work-sans/latin-ext-500.css';
 import '@fontsource/work-sans/latin-ext-600.css';
-import './styles/tokens.css';
 import './styles/base.css';
 import { QueryClientProvider } from '@tanstack/react-query';
 import { StrictMode } from 'react';

@@ -158,9 +158,7 @@ export function calendar(
         };
       }),
       tideMarks: days.flatMap((on) => {
-        const kind = { 8: 'springs', 15: 'neaps', 22: 'springs', 30: 'neaps' }[
-          Number(on.slice(8))
-        ];
+        const kind = { 8: 'springs', 15: 'neaps', 22: 'springs', 30: 'neaps' }[Number(on.slice(8))];
         return kind === undefined ? [] : [{ on, kind, rangeM: kind === 'springs' ? 4.7 : 2.2 }];
       }),
     },
@@ -188,7 +186,8 @@ export function calendar(
           slots: [...session.slots].map((letter, index) => ({
             id: idOf(session.number * 10 + index),
             slotKindName: kinds[index],
-            state: letter === 'D' ? 'in-doubt' : letter === 'G' || letter === 'M' ? 'gap' : 'claimed',
+            state:
+              letter === 'D' ? 'in-doubt' : letter === 'G' || letter === 'M' ? 'gap' : 'claimed',
             isYours: letter === 'Y',
             mayClaim: letter === 'M',
           })),
@@ -384,9 +383,7 @@ function timesOf(day: CalendarDay) {
 }
 
 function curveOf(from: CalendarDay, to: CalendarDay, everyMinutes: number) {
-  return madeUpCurve(
-    startOfDay(from, zone),
-    startOfDay(addDays(to, 1), zone),
-    everyMinutes,
-  ).map(({ at, heightM }) => ({ at: toIso(at), heightM }));
+  return madeUpCurve(startOfDay(from, zone), startOfDay(addDays(to, 1), zone), everyMinutes).map(
+    ({ at, heightM }) => ({ at: toIso(at), heightM }),
+  );
 }

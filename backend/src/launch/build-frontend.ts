@@ -31,7 +31,10 @@ export async function buildFrontend(signal?: AbortSignal): Promise<void> {
 function hashOfSources(): string {
   const hash = createHash('sha256');
   for (const file of sources.flatMap(filesIn)) {
-    hash.update(`${file}\0`).update(readFileSync(join(projectRoot, file))).update('\0');
+    hash
+      .update(`${file}\0`)
+      .update(readFileSync(join(projectRoot, file)))
+      .update('\0');
   }
   return hash.digest('hex');
 }

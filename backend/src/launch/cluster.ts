@@ -1,5 +1,14 @@
 import { spawn, spawnSync } from 'node:child_process';
-import { chownSync, closeSync, existsSync, openSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import {
+  chownSync,
+  closeSync,
+  existsSync,
+  openSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
@@ -50,15 +59,20 @@ export async function openCluster(wish: ClusterWish): Promise<Cluster> {
   if (!existsSync(folder)) makeCluster(wish, folder);
   refuseOtherVersion(folder, wish.programs);
   const left = await leftRunning(folder, wish.superuserPassword);
-  if (left !== null) return running(left.port, wish.superuserPassword, left.pid, goneByPid(left.pid));
+  if (left !== null)
+    return running(left.port, wish.superuserPassword, left.pid, goneByPid(left.pid));
   const port = await wish.choosePort();
   const log = openSync(wish.logFile, 'w', 0o600);
   // Its own process group: Ctrl-C at the terminal must not end it before the application has.
-  const server = spawn(join(wish.programs.folder, 'postgres'), serverOptions(folder, port, wish.isThrowAway), {
-    ...runAs(wish.home.account),
-    stdio: ['ignore', log, log],
-    detached: true,
-  });
+  const server = spawn(
+    join(wish.programs.folder, 'postgres'),
+    serverOptions(folder, port, wish.isThrowAway),
+    {
+      ...runAs(wish.home.account),
+      stdio: ['ignore', log, log],
+      detached: true,
+    },
+  );
   closeSync(log);
   const gone = new Promise<void>((resolve) => {
     server.once('exit', () => resolve());
@@ -73,7 +87,9 @@ export async function openCluster(wish: ClusterWish): Promise<Cluster> {
 }
 
 /** The process id in the lock file of a cluster's server; null when none is there. */
-export function lockHolder(home: ClusterHome): { readonly pid: number; readonly port: number } | null {
+export function lockHolder(
+  home: ClusterHome,
+): { readonly pid: number; readonly port: number } | null {
   return readLock(join(home.folder, 'cluster'));
 }
 
@@ -213,10 +229,7 @@ function isOneOf(error: unknown, codes: readonly string[]): boolean {
   return error instanceof Error && codes.includes(String(Reflect.get(error, 'code')));
 }
 
-async function untilReady(
-  check: () => Promise<Answer>,
-  throwIfGone: () => void,
-): Promise<void> {
+async function untilReady(check: () => Promise<Answer>, throwIfGone: () => void): Promise<void> {
   const untilMs = performance.now() + readyTimeoutMs;
   for (;;) {
     const answer = await check();

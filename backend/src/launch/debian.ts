@@ -15,7 +15,16 @@ export function installDebianPackages(names: readonly string[], whatFor: string)
   }
   say(`Installing ${whatFor} with apt-get. Up to a minute or two.`);
   runAsRoot(prefix, ['apt-get', 'update', '-q']);
-  runAsRoot(prefix, ['apt-get', 'install', '-q', '-y', '--no-install-recommends', '-o', 'Dpkg::Options::=--force-confold', ...names]);
+  runAsRoot(prefix, [
+    'apt-get',
+    'install',
+    '-q',
+    '-y',
+    '--no-install-recommends',
+    '-o',
+    'Dpkg::Options::=--force-confold',
+    ...names,
+  ]);
 }
 
 /** Runs a command as root, its output on standard error. Throws CannotStart when it fails. */

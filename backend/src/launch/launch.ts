@@ -21,18 +21,22 @@ export class Launch {
     this.tellTrouble = resolve;
   });
 
-  add(runs: Runs): void {
+  async add(runs: Runs): Promise<void> {
     if (this.stopping.signal.aborted) {
-      throw new CannotStart(`Stopped before ${runs.name} had started.`);
+      await runs.stop();
+      throw new CannotStart(`Stopped while ${runs.name} was starting.`);
     }
     this.begun.push(runs);
     void runs.gone.then((lines) =>
-      this.tellTrouble(`${runs.name} has ended unexpectedly.\n${lines}`.trimEnd()),
+      this.tellTrouble(
+        `${runs.name} has ended unexpectedly, so everything stops.\n${lines}`.trimEnd(),
+      ),
     );
   }
 
   async stop(): Promise<void> {
     this.stopping.abort();
-    for (let runs = this.begun.pop(); runs !== undefined; runs = this.begun.pop()) await runs.stop();
+    for (let runs = this.begun.pop(); runs !== undefined; runs = this.begun.pop())
+      await runs.stop();
   }
 }

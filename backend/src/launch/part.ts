@@ -1,27 +1,27 @@
 import { spawn } from 'node:child_process';
 import { closeSync, existsSync, openSync, readFileSync } from 'node:fs';
 import { projectRoot } from './data-folder.ts';
+import type { Runs } from './launch.ts';
 import { CannotStart } from './say.ts';
 
 export interface PartWish {
-  /** As people call it: 'the mail catcher'. */
+  /** As people call it: 'The mail catcher'. */
   readonly name: string;
   /** The TypeScript file to run, from the root of the project. */
   readonly file: string;
   readonly env: Readonly<Record<string, string | undefined>>;
   /** Where it writes; null: to the terminal. */
   readonly logFile: string | null;
+  /** How long it may take to end in order. */
+  readonly graceMs: number;
 }
 
 /** A program that was started as a child, and that ends by itself when this process is gone. */
-export interface Part {
-  readonly name: string;
+export interface Part extends Runs {
   /** Waits until the part says that it is ready; throws CannotStart when it ends before. */
   untilReady(): Promise<void>;
-  /** Resolves, with what it wrote last, when the part ends without having been told to. */
-  readonly gone: Promise<string>;
   /** Asks it to end; after the grace it is ended, with everything that it began. */
-  stop(graceMs: number): Promise<void>;
+  stop(): Promise<void>;
 }
 
 const linesOfLog = 15;
@@ -60,17 +60,18 @@ export function startPart(wish: PartWish): Part {
     untilReady: () =>
       Promise.race([
         ready,
-        gone.then((lines) => {
-          throw new CannotStart(`${capital(wish.name)} did not start.\n${lines}`.trimEnd());
+        ended.then(() => {
+          const lines = lastLines(wish.logFile);
+          throw new CannotStart(`${wish.name} did not start.\n${lines}`.trimEnd());
         }),
       ]),
     gone,
-    async stop(graceMs) {
+    async stop() {
       isToldToStop = true;
       child.kill('SIGTERM');
       const late = setTimeout(() => {
         if (child.pid !== undefined) process.kill(-child.pid, 'SIGKILL');
-      }, graceMs);
+      }, wish.graceMs);
       await ended;
       clearTimeout(late);
     },
@@ -80,8 +81,4 @@ export function startPart(wish: PartWish): Part {
 function lastLines(file: string | null): string {
   if (file === null || !existsSync(file)) return '';
   return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-linesOfLog).join('\n');
-}
-
-function capital(text: string): string {
-  return text.charAt(0).toUpperCase() + text.slice(1);
 }

@@ -1,28 +1,38 @@
 import type { z } from 'zod';
-import type { Contract } from '#shared/contracts/contract.ts';
-import { problem } from '#shared/contracts/problem.ts';
+import type * as account from '#shared/contracts/account.ts';
+import type { EndpointName } from '#shared/contracts/endpoints.ts';
+import { endpoints } from '#shared/contracts/endpoints.ts';
+import type { ProblemReply } from '#shared/contracts/problem.ts';
+import type * as sessions from '#shared/contracts/sessions.ts';
+import type * as slots from '#shared/contracts/slots.ts';
 import { NoAnswerError, ProblemError } from './problem-error.ts';
 
+type Contracts = typeof account & typeof sessions & typeof slots;
+
 /** What to send: the parts that the contract names, as they are written before parsing. */
-export interface Sent<C extends Contract> {
-  readonly params: z.input<C['params']>;
-  readonly query: z.input<C['query']>;
-  readonly body: z.input<C['body']>;
+export interface Sent<Name extends EndpointName> {
+  readonly params: z.input<Contracts[Name]['params']>;
+  readonly query: z.input<Contracts[Name]['query']>;
+  readonly body: z.input<Contracts[Name]['body']>;
 }
 
+/** The reply of one endpoint. */
+export type Reply<Name extends EndpointName> = z.output<Contracts[Name]['reply']>;
+
 /**
- * Calls one endpoint and answers its reply. Throws a ProblemError for every other answer of the
- * server and a NoAnswerError where none came or none could be read. The reply is taken at the
- * contract's word: the server sends nothing that its contract does not name.
+ * Calls the endpoint of one contract and answers its reply. Throws a ProblemError for every other
+ * answer of the server and a NoAnswerError where none came or none could be read. The reply is
+ * taken at the contract's word: the server sends nothing that its contract does not name.
  */
-export async function call<C extends Contract>(
-  contract: C,
-  sent: Partial<Sent<C>>,
+export async function call<Name extends EndpointName>(
+  name: Name,
+  sent: Partial<Sent<Name>>,
   signal?: AbortSignal,
-): Promise<z.output<C['reply']>> {
-  const hasBody = contract.method !== 'get';
-  const response = await reach(addressOf(contract.path, sent.params, sent.query), {
-    method: contract.method.toUpperCase(),
+): Promise<Reply<Name>> {
+  const { method, path } = endpoints[name];
+  const hasBody = method !== 'get';
+  const response = await reach(addressOf(path, sent.params, sent.query), {
+    method: method.toUpperCase(),
     credentials: 'same-origin',
     headers: {
       accept: 'application/json, application/problem+json',
@@ -32,10 +42,9 @@ export async function call<C extends Contract>(
     ...(signal === undefined ? {} : { signal }),
   });
   const answer = await readJson(response);
-  if (response.ok) return answer as z.output<C['reply']>;
-  const told = problem.safeParse(answer);
-  if (!told.success) throw new NoAnswerError(told.error);
-  throw new ProblemError(told.data);
+  if (response.ok) return answer as Reply<Name>;
+  if (isProblem(response, answer)) throw new ProblemError(answer);
+  throw new NoAnswerError(new Error(`Status ${response.status} without a problem`));
 }
 
 function addressOf(path: string, params: unknown, query: unknown): string {
@@ -61,4 +70,14 @@ async function readJson(response: Response): Promise<unknown> {
   } catch (error) {
     throw new NoAnswerError(error);
   }
+}
+
+/** Whether the server itself says what is wrong, and not something between it and the browser. */
+function isProblem(response: Response, answer: unknown): answer is ProblemReply {
+  return (
+    (response.headers.get('content-type') ?? '').startsWith('application/problem+json') &&
+    typeof answer === 'object' &&
+    answer !== null &&
+    'code' in answer
+  );
 }

@@ -2,10 +2,12 @@ import type { ReactNode, Ref } from 'react';
 
 export type ButtonLook = 'solid' | 'line' | 'stop' | 'plain';
 
-const shape =
-  'inline-flex items-center justify-center gap-2 rounded-md border-[1.5px] px-4 py-2 text-ui font-semibold no-underline min-h-button max-wide:min-h-target';
+const frame =
+  'inline-flex items-center justify-center gap-2 rounded-md border-[1.5px] px-4 py-2 font-semibold no-underline';
+const shape = `${frame} min-h-button text-ui max-wide:min-h-target`;
+const solid = 'border-deep bg-deep text-on-deep hover:border-ink hover:bg-ink hover:text-foam';
 const looks: Record<ButtonLook, string> = {
-  solid: `${shape} border-deep bg-deep text-on-deep hover:border-ink hover:bg-ink hover:text-foam`,
+  solid: `${shape} ${solid}`,
   line: `${shape} border-deep bg-transparent text-deep hover:bg-wash`,
   stop: `${shape} border-anemone bg-transparent text-anemone hover:bg-wash`,
   plain:
@@ -43,7 +45,7 @@ export function Button(props: ButtonProps) {
 /** A link off this application, or one that must load a page, drawn as a button. */
 export function ButtonLink({ href, children }: { href: string; children: ReactNode }) {
   return (
-    <a className={`${looks.solid} w-full min-h-13 text-md`} href={href}>
+    <a className={`${frame} ${solid} min-h-13 w-full text-md`} href={href}>
       {children}
     </a>
   );

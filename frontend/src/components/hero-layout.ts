@@ -93,7 +93,7 @@ export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): He
         upright(plot, facts, facts.offByAt, offPostTopPx),
         upright(plot, facts, facts.startsAt, topPx),
       ];
-  const place = (key: HeroLabelKey, ...places: readonly Omit<Label, 'parts'>[]): void => {
+  const place: Place = (key, ...places) => {
     const label = places
       .map((at) => ({ key, parts: words[key], ...at }))
       .find((candidate) => {
@@ -143,7 +143,13 @@ export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): He
     place(
       'starts',
       { x: startX - 9, y: row(0), anchor: 'end', size: 'axis' },
-      { x: startX + 6, y: row(0), anchor: 'start', size: 'axis' },
+      {
+        x: startX + 6,
+        y: row(0),
+        anchor: 'start',
+        size: 'axis',
+        parts: words.starts.slice(0, 1),
+      },
     );
     place('party-meets', { x: startX - 9, y: row(1), anchor: 'end', size: 'axis' });
     place('crew-meets', { x: startX - 9, y: row(2), anchor: 'end', size: 'axis' });
@@ -161,7 +167,9 @@ export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): He
   };
 }
 
-type Place = (key: HeroLabelKey, ...places: readonly Omit<Label, 'parts'>[]) => void;
+/** A place for words; words of its own where it has room for fewer. */
+type Spot = Omit<Label, 'parts'> & Partial<Pick<Label, 'parts'>>;
+type Place = (key: HeroLabelKey, ...places: readonly Spot[]) => void;
 type Words = Record<HeroLabelKey, Label['parts']>;
 
 /** The words of each label: plain text, and in bold the clock that matters in it. */

@@ -20,7 +20,7 @@ export interface Box {
 
 const SIZE_PX: Record<LabelSize, number> = { axis: 13, post: 15, off: 16, low: 24 };
 /** Room for a letter as a share of the size: the widest mean of the words that are set here. */
-const LETTER = { plain: 0.56, strong: 0.6 };
+const LETTER = { plain: 0.55, strong: 0.55 };
 const ASCENT = 0.78;
 const DESCENT = 0.24;
 

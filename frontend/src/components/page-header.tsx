@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { Link, NavLink } from 'react-router-dom';
+import { Link } from 'react-router-dom';
 import { Mark } from './mark.tsx';
 
 /** A screen that the navigation leads to. */
@@ -57,7 +57,7 @@ export function FooterNav({ screens }: { screens: readonly Screen[] }) {
 
 function ScreenLink({ screen }: { screen: Screen }) {
   return (
-    <NavLink
+    <Link
       to={screen.to}
       className={`inline-flex min-h-target items-center self-center text-ui whitespace-nowrap no-underline ${
         screen.isCurrent ? 'font-semibold text-deep underline-wave' : 'font-medium text-ink'
@@ -65,7 +65,7 @@ function ScreenLink({ screen }: { screen: Screen }) {
       aria-current={screen.isCurrent ? 'page' : undefined}
     >
       {screen.name}
-    </NavLink>
+    </Link>
   );
 }
 

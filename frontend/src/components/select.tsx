@@ -6,10 +6,10 @@ export function Select(props: {
   readonly onChange: (value: string) => void;
 }) {
   return (
-    <span className="relative inline-flex min-w-0 max-wide:flex-1">
+    <span className="relative inline-flex min-w-30 max-wide:flex-1 wide:min-w-38">
       <select
         aria-label={props.name}
-        className="min-h-9 w-full min-w-38 appearance-none truncate rounded-md border-[1.5px] border-edge bg-paper py-1 pr-8 pl-3 text-ui max-wide:min-h-target"
+        className="min-h-9 w-full appearance-none truncate rounded-md border-[1.5px] border-edge bg-paper py-1 pr-8 pl-3 text-ui max-wide:min-h-target"
         value={props.value}
         onChange={(event) => props.onChange(event.target.value)}
       >

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { roles } from '../policy/policy.ts';
 import type { Contract } from './contract.ts';
 import { contract } from './contract.ts';
+import { endpoints } from './endpoints.ts';
 import {
   curvePoint,
   extreme,
@@ -15,8 +16,7 @@ import {
 
 /** Who is signed in, and what every page needs to know. */
 export const seeAccount = contract({
-  method: 'get',
-  path: '/api/account',
+  ...endpoints.seeAccount,
   summary: 'Who is signed in, and the group',
   params: nothing,
   query: nothing,
@@ -41,8 +41,7 @@ export const seeAccount = contract({
 
 /** Ends the sign-in here; the browser then goes to `goTo` to end it at the provider too. */
 export const signOut = contract({
-  method: 'post',
-  path: '/api/account/sign-out',
+  ...endpoints.signOut,
   summary: 'Sign out here and at the provider',
   params: nothing,
   query: nothing,
@@ -52,8 +51,7 @@ export const signOut = contract({
 
 /** What anybody may see before signing in: the group, its shores, the next open session. */
 export const seeFrontDoor = contract({
-  method: 'get',
-  path: '/api/front-door',
+  ...endpoints.seeFrontDoor,
   summary: 'The group, its shores and the next open session',
   params: nothing,
   query: nothing,

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { contract } from './contract.ts';
+import { endpoints } from './endpoints.ts';
 import { slotView } from './slots.ts';
 import {
   calendarDay,
@@ -25,8 +26,7 @@ export const trailEntry = z.strictObject({
 });
 
 export const seeSession = contract({
-  method: 'get',
-  path: '/api/sessions/:sessionId',
+  ...endpoints.seeSession,
   summary: 'One session: its water line, slots, meeting place and trail',
   params: z.strictObject({ sessionId: uuid }),
   query: nothing,
@@ -71,8 +71,7 @@ export const seeSession = contract({
 
 /** The sessions and the water of a span of whole local days, for the month and the strand list. */
 export const seeCalendar = contract({
-  method: 'get',
-  path: '/api/calendar',
+  ...endpoints.seeCalendar,
   summary: 'Sessions and water from one day to another',
   params: nothing,
   query: z.strictObject({

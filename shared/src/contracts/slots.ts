@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { contract } from './contract.ts';
+import { endpoints } from './endpoints.ts';
 import { reasonAgainst } from './reasons.ts';
 import { calendarDay, instant, nothing, uuid } from './wire.ts';
 
@@ -49,8 +50,7 @@ export const slotView = z.strictObject({
 });
 
 export const claimSlot = contract({
-  method: 'post',
-  path: '/api/slots/:slotId/claim',
+  ...endpoints.claimSlot,
   summary: 'Take a slot for oneself',
   params: z.strictObject({ slotId: uuid }),
   query: nothing,
@@ -59,8 +59,7 @@ export const claimSlot = contract({
 });
 
 export const releaseSlot = contract({
-  method: 'post',
-  path: '/api/slots/:slotId/release',
+  ...endpoints.releaseSlot,
   summary: 'Give back a slot that one holds',
   params: z.strictObject({ slotId: uuid }),
   query: nothing,

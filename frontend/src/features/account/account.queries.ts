@@ -1,10 +1,9 @@
 import { queryOptions } from '@tanstack/react-query';
+import type { Reply } from '#frontend/api/call.ts';
 import { call } from '#frontend/api/call.ts';
-import type { z } from 'zod';
-import { seeAccount, seeFrontDoor } from '#shared/contracts/account.ts';
 
-export type AccountView = z.output<typeof seeAccount.reply>;
-export type FrontDoorView = z.output<typeof seeFrontDoor.reply>;
+export type AccountView = Reply<'seeAccount'>;
+export type FrontDoorView = Reply<'seeFrontDoor'>;
 
 /** The replies that this feature keeps, under one root. */
 export const accountQueries = {
@@ -12,11 +11,11 @@ export const accountQueries = {
   account: () =>
     queryOptions({
       queryKey: [...accountQueries.root, 'me'],
-      queryFn: ({ signal }) => call(seeAccount, {}, signal),
+      queryFn: ({ signal }) => call('seeAccount', {}, signal),
     }),
   frontDoor: () =>
     queryOptions({
       queryKey: [...accountQueries.root, 'front-door'],
-      queryFn: ({ signal }) => call(seeFrontDoor, {}, signal),
+      queryFn: ({ signal }) => call('seeFrontDoor', {}, signal),
     }),
 };

@@ -1,6 +1,7 @@
 import { useMeasuredWidth } from '#frontend/components/use-measured-width.ts';
-import type { Plot } from '#frontend/components/water-curve.ts';
+import type { Plot, WaterPoint } from '#frontend/components/water-curve.ts';
 import {
+  cutCurve,
   heightAt,
   linePath,
   readCurve,
@@ -23,6 +24,7 @@ const LOW_PX = 200;
 /** The width of a day under which its words would touch the next day's. */
 const LEAST_DAY_PX = 66;
 const DAYS = 14;
+const HALF_DAY_MS = 12 * 3_600_000;
 
 /** The home shore's water for a fortnight, the sessions' posts standing in it. */
 export function FortnightWater({ fortnight }: { fortnight: Fortnight }) {
@@ -121,7 +123,7 @@ function Drawing(props: {
             <TwoLines
               key={at}
               x={x}
-              y={plot.topPx + 20}
+              y={highestBeside(plot, curve, fromIso(at)) - 14 * scale}
               scale={scale}
               above={shortDay(dayAt(fromIso(at), zone))}
               below="neaps"
@@ -131,6 +133,12 @@ function Drawing(props: {
         })}
     </svg>
   );
+}
+
+/** The y of the highest water within half a day of a moment. */
+function highestBeside(plot: Plot, curve: readonly WaterPoint[], at: Instant): number {
+  const beside = cutCurve(curve, at - HALF_DAY_MS, at + HALF_DAY_MS);
+  return yOf(plot, Math.max(...beside.map(({ heightM }) => heightM)));
 }
 
 function TwoLines(props: {

@@ -14,7 +14,7 @@ export function Who({ person }: { person: NonNullable<AccountView['person']> }) 
           {roles.length === 0 ? 'volunteer' : roles.join(', ')}
         </span>
       </div>
-      <div>
+      <div className="whitespace-nowrap">
         <Button look="plain" isBusy={signOut.isPending} onPress={() => signOut.mutate()}>
           Sign out
         </Button>

@@ -1,4 +1,5 @@
 import { Select } from '#frontend/components/select.tsx';
+import { useWideScreen } from '#frontend/components/use-wide-screen.ts';
 import { Tick } from '#frontend/components/tick.tsx';
 import type { CalendarView } from '#shared/contracts/sessions.ts';
 import type { CalendarAddress } from './calendar-address.ts';
@@ -12,6 +13,7 @@ export function CalendarFilters(props: {
   readonly onChange: (name: 'shore' | 'mine' | 'gaps', value: string | null) => void;
 }) {
   const { shores, address, onChange } = props;
+  const isWide = useWideScreen();
   return (
     <div
       role="group"
@@ -28,12 +30,12 @@ export function CalendarFilters(props: {
         onChange={(shoreId) => onChange('shore', shoreId === ALL ? null : shoreId)}
       />
       <Tick
-        words="Only mine"
+        words={isWide ? 'Only mine' : 'Mine'}
         isTicked={address.onlyMine}
         onChange={(isTicked) => onChange('mine', isTicked ? '1' : null)}
       />
       <Tick
-        words="Only gaps"
+        words={isWide ? 'Only gaps' : 'Gaps'}
         isTicked={address.onlyGaps}
         onChange={(isTicked) => onChange('gaps', isTicked ? '1' : null)}
       />

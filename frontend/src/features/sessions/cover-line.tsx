@@ -14,12 +14,12 @@ export function CoverLine(props: {
   if (state === 'stood-down') return <span>Stood down</span>;
   const isPast = hasEnded || state === 'closed';
   return (
-    <span className="flex flex-wrap items-center gap-x-1.5">
-      <LimpetRow looks={cover.looks} sizePx={limpetPx} isPast={isPast} />
-      <span>
-        {state === 'draft' && 'Draft, '}
-        {isPast ? 'Done' : openWords(cover)}
+    <span className="block">
+      <span className={`inline-block align-[-2px] ${limpetPx > 20 ? 'mr-3.5' : 'mr-1.5'}`}>
+        <LimpetRow looks={cover.looks} sizePx={limpetPx} isPast={isPast} />
       </span>
+      {state === 'draft' && 'Draft, '}
+      {isPast ? 'Done' : openWords(cover)}
     </span>
   );
 }

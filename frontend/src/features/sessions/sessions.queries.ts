@@ -2,7 +2,6 @@ import type { QueryClient } from '@tanstack/react-query';
 import { queryOptions } from '@tanstack/react-query';
 import { call } from '#frontend/api/call.ts';
 import type { SessionView } from '#shared/contracts/sessions.ts';
-import { seeCalendar, seeSession } from '#shared/contracts/sessions.ts';
 import type { SlotView } from '#shared/contracts/slots.ts';
 import type { CalendarDay } from '#shared/kernel/time.ts';
 
@@ -12,12 +11,12 @@ export const sessionsQueries = {
   calendar: (from: CalendarDay, to: CalendarDay) =>
     queryOptions({
       queryKey: [...sessionsQueries.root, 'calendar', from, to],
-      queryFn: ({ signal }) => call(seeCalendar, { query: { from, to } }, signal),
+      queryFn: ({ signal }) => call('seeCalendar', { query: { from, to } }, signal),
     }),
   session: (sessionId: string) =>
     queryOptions({
       queryKey: [...sessionsQueries.root, 'session', sessionId],
-      queryFn: ({ signal }) => call(seeSession, { params: { sessionId } }, signal),
+      queryFn: ({ signal }) => call('seeSession', { params: { sessionId } }, signal),
     }),
 };
 

@@ -2,7 +2,6 @@ import { useMutation } from '@tanstack/react-query';
 import { call } from '#frontend/api/call.ts';
 import { ProblemError } from '#frontend/api/problem-error.ts';
 import type { SlotView } from '#shared/contracts/slots.ts';
-import { claimSlot, releaseSlot } from '#shared/contracts/slots.ts';
 
 /** What a page does when slots may have changed hands. */
 export interface OnSlot {
@@ -15,7 +14,7 @@ export interface OnSlot {
 /** Takes a slot for the reader. A refusal comes as a ProblemError with every reason. */
 export function useClaimSlot(slotId: string, { onChanged, onRefused }: OnSlot) {
   return useMutation({
-    mutationFn: () => call(claimSlot, { params: { slotId } }),
+    mutationFn: () => call('claimSlot', { params: { slotId } }),
     onSuccess: onChanged,
     onError: (error) => {
       if (error instanceof ProblemError) onRefused();
@@ -26,7 +25,7 @@ export function useClaimSlot(slotId: string, { onChanged, onRefused }: OnSlot) {
 /** Gives back a slot that the reader holds. */
 export function useReleaseSlot(slotId: string, { onChanged, onRefused }: OnSlot) {
   return useMutation({
-    mutationFn: () => call(releaseSlot, { params: { slotId } }),
+    mutationFn: () => call('releaseSlot', { params: { slotId } }),
     onSuccess: onChanged,
     onError: (error) => {
       if (error instanceof ProblemError) onRefused();

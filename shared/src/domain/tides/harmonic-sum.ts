@@ -19,8 +19,10 @@ export interface WaterMotion {
 
 /** A sum of waves that can be asked for its value anywhere, and is smooth everywhere. */
 export interface HarmonicSum {
+  /** The height alone, in half the time. */
+  readonly heightAtM: (at: Instant) => number;
   readonly motionAt: (at: Instant) => WaterMotion;
-  /** A value that the third derivative (metres an hour cubed) nowhere exceeds near that instant. */
+  /** What the third derivative (metres an hour cubed) nowhere exceeds within an hour of then. */
   readonly jerkBoundAt: (at: Instant) => number;
 }
 
@@ -69,6 +71,8 @@ export function harmonicSum(waves: readonly StationWave[]): HarmonicSum {
     turnBounds.set(year, made);
     return made;
   };
+  const heightAtM = (at: Instant): number =>
+    turnYear(at) === null ? heightOf(wavesOf(yearUtcAt(at)), at) : motionAt(at).heightM;
   const motionAt = (at: Instant): WaterMotion => {
     const year = turnYear(at);
     if (year === null) return motionOf(wavesOf(yearUtcAt(at)), at);
@@ -79,11 +83,10 @@ export function harmonicSum(waves: readonly StationWave[]): HarmonicSum {
     );
   };
   const jerkBoundAt = (at: Instant): number => {
-    // An hour wider than the turn itself, so that a bound asked for mid-interval covers its ends.
     const year = turnYear(at - HOUR_MS) ?? turnYear(at + HOUR_MS);
     return year === null ? wavesOf(yearUtcAt(at)).jerkBound : turnBound(year);
   };
-  return { motionAt, jerkBoundAt };
+  return { heightAtM, motionAt, jerkBoundAt };
 }
 
 /** The year whose beginning lies within reach of the instant, or null. */
@@ -109,6 +112,17 @@ function yearWaves(waves: readonly StationWave[], year: number): YearWaves {
     jerkBound += Math.abs(f * amplitudeM) * speed ** 3;
   });
   return { startAt, amplitudesM, speedsRadPerHour, phasesRad, jerkBound };
+}
+
+function heightOf(waves: YearWaves, at: Instant): number {
+  const hours = (at - waves.startAt) / HOUR_MS;
+  let heightM = 0;
+  for (let place = 0; place < waves.amplitudesM.length; place += 1) {
+    const speed = waves.speedsRadPerHour[place] as number;
+    const angle = speed * hours + (waves.phasesRad[place] as number);
+    heightM += (waves.amplitudesM[place] as number) * Math.cos(angle);
+  }
+  return heightM;
 }
 
 function motionOf(waves: YearWaves, at: Instant): WaterMotion {

@@ -64,7 +64,7 @@ export function tideCurve(station: TideStation): Verdict<TideCurve, CurveRefusal
 
 function harmonicCurve(waves: readonly StationWave[], meanLevelM: number): TideCurve {
   const sum = harmonicSum(waves);
-  const heightAtM: TideCurve['heightAtM'] = (at) => meanLevelM + sum.motionAt(at).heightM;
+  const heightAtM: TideCurve['heightAtM'] = (at) => meanLevelM + sum.heightAtM(at);
   return {
     heightAtM,
     series: (fromAt, toAt, stepMinutes) => heightsAtSteps(heightAtM, fromAt, toAt, stepMinutes),

@@ -15,27 +15,30 @@ interface Slope {
 
 const HOUR_MS = 3_600_000;
 
+/** The spans that are searched one by one; HarmonicSum.jerkBoundAt reaches an hour to each side. */
+const SPAN_MS = 2 * HOUR_MS;
+
 /** Two turns closer together than this are one resting of the water, and no high and low. */
 const CLOSEST_TURNS_MS = 1_000;
 
 /**
  * Every high and low of the sum with fromAt <= at < toAt, in order and to the millisecond.
  *
- * None is lost, and highs and lows alternate: an hour is only passed over where Taylor's bound on
+ * None is lost, and highs and lows alternate: a span is only passed over where Taylor's bound on
  * the slope shows it free of zeros, taken as holding one where the bound on the curvature shows
- * the slope to be monotone, and halved otherwise, down to a second. The hours are whole hours of
- * UTC, so that the same turn is found from whatever span is asked for.
+ * the slope to be monotone, and halved otherwise, down to a second. The spans begin at fixed hours
+ * of UTC, so that the same turn is found from whatever time is asked for.
  */
 export function turningPoints(sum: HarmonicSum, fromAt: Instant, toAt: Instant): TurningPoint[] {
   const found: TurningPoint[] = [];
   if (!(fromAt < toAt)) return found;
   const keep = (at: Instant, kind: 'high' | 'low') => {
-    if (at >= fromAt && at < toAt) found.push({ at, kind, heightM: sum.motionAt(at).heightM });
+    if (at >= fromAt && at < toAt) found.push({ at, kind, heightM: sum.heightAtM(at) });
   };
-  // From the hour before a whole hour too, since a turn just under it is rounded onto it.
-  const firstAt = Math.floor((fromAt - 1) / HOUR_MS) * HOUR_MS;
+  // From the span before too where one begins, since a turn just under it is rounded onto it.
+  const firstAt = Math.floor((fromAt - 1) / SPAN_MS) * SPAN_MS;
   let left = slopeAt(sum, firstAt);
-  for (let at = firstAt + HOUR_MS; left.at < toAt; at += HOUR_MS) {
+  for (let at = firstAt + SPAN_MS; left.at < toAt; at += SPAN_MS) {
     const right = slopeAt(sum, at);
     search(sum, left, right, keep);
     left = right;
