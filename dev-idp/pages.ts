@@ -79,14 +79,19 @@ export function errorPage(
 }
 
 function personButton(person: DemoPerson): string {
-  const roles = person.roles.filter((role) => role !== 'volunteer' || person.roles.length === 1);
   return `
     <li><button name="subject" value="${escapeHtml(person.subject)}">
       <span class="who"><b>${escapeHtml(person.name)}</b>
-        <i>${escapeHtml(roles.length === 0 ? 'not in the group' : roles.join(', '))}</i></span>
+        <i>${escapeHtml(placeInGroup(person))}</i></span>
       <span>${escapeHtml(person.description)}</span>
       <small>${escapeHtml(person.email)}</small>
     </button></li>`;
+}
+
+function placeInGroup({ roles, isEmailVerified }: DemoPerson): string {
+  if (!isEmailVerified) return 'address not verified';
+  if (roles.length === 0) return 'not in the group';
+  return roles.filter((role) => role !== 'volunteer').join(', ') || 'volunteer';
 }
 
 function page({ title, body, nonce }: Page): string {
@@ -127,7 +132,8 @@ const style = `
 * { box-sizing: border-box; margin: 0; }
 body { background: var(--foam); color: var(--ink); font: 400 1rem/1.5 'Work Sans', system-ui, sans-serif; }
 header { background: var(--sand); padding: .75rem 1.25rem; }
-header p, main { max-width: 40rem; margin: 0 auto; }
+header p { max-width: 37.5rem; margin: 0 auto; }
+main { max-width: 40rem; margin: 0 auto; }
 main { padding: 2rem 1.25rem 4rem; }
 h1 { font-size: 2rem; line-height: 1.15; letter-spacing: -.018em; text-wrap: balance; }
 h2 { font-size: 1rem; font-weight: 600; color: var(--barnacle); margin: 2rem 0 .75rem; }

@@ -26,6 +26,13 @@ export default defineConfig({
               test: /node_modules[\\/](react|react-dom|react-router|scheduler)[\\/]/,
             },
             { name: 'calendar', test: /node_modules[\\/](@fullcalendar|preact)[\\/]/ },
+            // What the pages share travels in one file: small ones squeeze badly one by one. Claims
+            // are left out, since the month, the largest page, has none.
+            {
+              name: 'shared',
+              test: /node_modules[\\/](@tanstack|dayjs)[\\/]|shared[\\/]src[\\/]|frontend[\\/]src[\\/](?!features[\\/]slots)/,
+              minShareCount: 2,
+            },
           ],
         },
       },

@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import type { TrailEntry } from '#shared/domain/trail/trail-line.ts';
 import type { PersonId } from '#shared/kernel/ids.ts';
-import type { Read, Transactions, Tx } from './database/transaction.ts';
+import type { Transactions, Tx } from './database/transaction.ts';
 import type { Clock } from './platform/clock/clock.ts';
 import type { Job } from './platform/jobs/job.ts';
 import type { Mailer } from './platform/mail/mailer.ts';
@@ -50,4 +50,4 @@ export interface AppContext extends Transactions {
   recordTrail(tx: Tx, ...entries: readonly TrailEntry[]): Promise<void>;
 }
 
-export type { Read, Tx };
+export type { Tx };

@@ -4,6 +4,7 @@ import { redirect } from 'react-router-dom';
 import { LoadingWash } from './components/loading-wash.tsx';
 import { accountQueries } from './features/account/account.queries.ts';
 import { ErrorPage } from './routes/error.tsx';
+import { NotFoundPage } from './routes/not-found.tsx';
 
 /** Where somebody signs in who was on the way to a page of this site. */
 export function signInPage(returnTo: string): string {
@@ -13,7 +14,10 @@ export function signInPage(returnTo: string): string {
 /** Every page and its address. What stands behind the sign-in loads the account first. */
 export function routes(queryClient: QueryClient): RouteObject[] {
   const needsAccount = async ({ request }: LoaderFunctionArgs) => {
-    const account = await queryClient.ensureQueryData(accountQueries.account());
+    const account = await queryClient.query({
+      ...accountQueries.account(),
+      staleTime: 'static',
+    });
     if (account.person !== null) return null;
     const { pathname, search } = new URL(request.url);
     return redirect(signInPage(pathname + search));
@@ -37,7 +41,7 @@ export function routes(queryClient: QueryClient): RouteObject[] {
           children: [
             { index: true, lazy: () => import('./routes/calendar.tsx') },
             { path: '/sessions/:sessionId', lazy: () => import('./routes/session.tsx') },
-            { path: '*', lazy: () => import('./routes/not-found.tsx') },
+            { path: '*', Component: NotFoundPage },
           ],
         },
       ],

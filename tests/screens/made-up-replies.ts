@@ -36,13 +36,14 @@ export type ShoreName = keyof typeof shoreIds;
 
 const kinds = ['Shore leader', 'Back marker', 'Pool guide', 'Pool guide'] as const;
 
-export function account(
-  person: z.input<typeof seeAccount.reply>['person'] = {
-    id: idOf(1),
-    name: 'Callum Marrack',
-    roles: ['volunteer'],
-  },
-) {
+/** Who reads these pages. */
+export const callum: NonNullable<z.input<typeof seeAccount.reply>['person']> = {
+  id: idOf(1),
+  name: 'Callum Marrack',
+  roles: ['volunteer'],
+};
+
+export function account(person: z.input<typeof seeAccount.reply>['person'] = callum) {
   const low = madeUpNoonLow(today, zone);
   return seeAccount.reply.parse({
     group: { name: 'Skerrow Bay Shore Group', zone },
@@ -183,7 +184,7 @@ export function calendar(
           endsAt: times.endsAt,
           hasStarted,
           hasEnded: fromIso(times.endsAt) <= fromIso(now),
-          slots: [...session.slots].map((letter, index) => ({
+          slots: Array.from(session.slots, (letter, index) => ({
             id: idOf(session.number * 10 + index),
             slotKindName: kinds[index],
             state:
@@ -249,14 +250,17 @@ function entry(
   return { at, actorName, action, slotKindName };
 }
 
-const plainSlot = {
+const plainSlot: Omit<
+  z.input<typeof claimSlot.reply>,
+  'id' | 'slotKindId' | 'slotKindName' | 'needs' | 'state'
+> = {
   isFor18AndOver: false,
   isYours: false,
   holder: null,
   claim: null,
   release: null,
   standings: [],
-} as const;
+};
 
 export function slot(changes: z.input<typeof claimSlot.reply>): SlotView {
   return claimSlot.reply.parse(changes);

@@ -9,7 +9,7 @@ import { SessionEntity, SlotEntity } from './entities/session.entity.ts';
 import { ShoreEntity } from './entities/shore.entity.ts';
 import { SlotKindEntity, SlotKindRequirementEntity } from './entities/slot-kind.entity.ts';
 import { TrailEntity } from './entities/trail.entity.ts';
-import { FoundTheHouse1796000000000 } from './migrations/2026-12-01-found-the-house.ts';
+import { FoundTheHouse1796000000000 } from './migrations/found-the-house.ts';
 
 const entities = [
   PersonEntity,

@@ -50,8 +50,3 @@ export function databaseError(
   if (typeof code !== 'string' || !/^[0-9A-Z]{5}$/.test(code)) return null;
   return { code, constraint: typeof constraint === 'string' ? constraint : null };
 }
-
-/** Whether the error is PostgreSQL refusing by the constraint of this name. */
-export function isBroken(error: unknown, constraint: string): boolean {
-  return databaseError(error)?.constraint === constraint;
-}

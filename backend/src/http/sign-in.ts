@@ -1,3 +1,4 @@
+import { promisify } from 'node:util';
 import connectPgSimple from 'connect-pg-simple';
 import type { Request, RequestHandler } from 'express';
 import session from 'express-session';
@@ -94,18 +95,11 @@ export function signInOf(request: Request, now: () => Instant): SignIn {
       return pending;
     },
     async begin(personId, idToken) {
-      await new Promise<void>((resolve, reject) => {
-        request.session.regenerate((error: unknown) =>
-          error ? reject(error as Error) : resolve(),
-        );
-      });
+      await promisify(request.session.regenerate.bind(request.session))();
       request.session.signedIn = { personId, idToken, signedInAt: now(), seenAt: now() };
       await save(request);
     },
-    end: () =>
-      new Promise<void>((resolve, reject) => {
-        request.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve()));
-      }),
+    end: () => promisify(request.session.destroy.bind(request.session))(),
   };
 }
 
@@ -132,7 +126,5 @@ export async function whoIsSignedIn<Person extends { readonly roles: readonly Ro
 }
 
 function save(request: Request): Promise<void> {
-  return new Promise((resolve, reject) => {
-    request.session.save((error: unknown) => (error ? reject(error as Error) : resolve()));
-  });
+  return promisify(request.session.save.bind(request.session))();
 }

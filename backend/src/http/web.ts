@@ -138,29 +138,38 @@ function serveFrontend(app: Express, folder: string): void {
   app.use(express.static(folder, { index: false }));
   app.use((request, response, next) => {
     const isPage = request.method === 'GET' && request.accepts('html') !== false;
-    if (!isPage || !existsSync(indexFile)) return next();
-    response.set('Cache-Control', 'no-cache').sendFile(indexFile);
+    if (isPage && existsSync(indexFile)) {
+      response.set('Cache-Control', 'no-cache').sendFile(indexFile);
+    } else next();
   });
 }
 
 /** Turns what was thrown into RFC 9457 problem details. A bug answers 500 with an id and no more. */
 function answerProblems(log: Logger): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
-    if (response.headersSent) return next(error);
+    if (response.headersSent) {
+      next(error);
+      return;
+    }
     const problem = error instanceof Problem ? error : ofLibrary(error);
-    if (problem.code === 'unexpected') log.error({ err: error, id: request.id }, 'unexpected');
+    if (problem.code === 'unexpected') log.error({ err: error, id: idOf(request) }, 'unexpected');
     const status = problemStatus[problem.code];
     const reply: ProblemReply = {
       type: 'about:blank',
       title: problem.message,
       status,
       code: problem.code,
-      ...(problem.code === 'unexpected' ? { instance: String(request.id) } : {}),
+      ...(problem.code === 'unexpected' ? { instance: idOf(request) } : {}),
       ...(problem.fields.length > 0 ? { fields: [...problem.fields] } : {}),
       ...(problem.reasons.length > 0 ? { reasons: [...problem.reasons] } : {}),
     };
     response.status(status).type('application/problem+json').send(JSON.stringify(reply));
   };
+}
+
+/** The id that the log line of this request carries. */
+function idOf(request: Request): string {
+  return typeof request.id === 'string' ? request.id : '';
 }
 
 /** Errors of the body parser and the file server carry a status; everything else is a bug. */

@@ -1,6 +1,7 @@
+import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Launch } from './launch.ts';
-import { mailCatcherEnv, signInEnv } from './local-settings.ts';
+import { mailCatcherEnv, mailFolder, signInEnv } from './local-settings.ts';
 import type { LocalSettings } from './local-settings.ts';
 import { startPart } from './part.ts';
 import type { Secrets } from './secrets.ts';
@@ -31,6 +32,7 @@ async function start(
 
 /** Catches every letter and shows it on a page; sends none on. */
 export function startMailCatcher(launch: Launch, folder: string, local: LocalSettings) {
+  mkdirSync(mailFolder(folder), { recursive: true, mode: 0o700 });
   return start(launch, folder, {
     name: 'The mail catcher',
     file: 'backend/src/launch/run-mail-catcher.ts',

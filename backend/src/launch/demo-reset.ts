@@ -1,14 +1,11 @@
-import { prepareDatabase } from '#backend/database/prepare-database.ts';
-import { queueNames } from '#backend/jobs.ts';
 import { rmSync } from 'node:fs';
-import { join } from 'node:path';
 import { startApp, startMailCatcher } from './app-parts.ts';
 import { dataFolder } from './data-folder.ts';
 import { Launch } from './launch.ts';
-import { localSettings } from './local-settings.ts';
-import { appUser } from './make-database.ts';
-import { dropOwnDatabase, makeOwnDatabase, openOwnCluster } from './own-database.ts';
+import { localSettings, mailFolder } from './local-settings.ts';
+import { dropOwnDatabase } from './own-database.ts';
 import { keptPorts } from './ports.ts';
+import { readyOwnDatabase, startOwnCluster } from './ready-database.ts';
 import { takePlace, whoIsRunning } from './running.ts';
 import { CannotStart, runCommand, say } from './say.ts';
 import { keptSecrets } from './secrets.ts';
@@ -41,17 +38,10 @@ async function resetDemo(launch: Launch, folder: string): Promise<void> {
       'DATABASE_URL names a database that the start command did not make; it is left as it is.',
     );
   }
-  const cluster = await openOwnCluster(folder, ports, secrets);
-  await launch.add({
-    name: 'PostgreSQL',
-    stop: () => cluster.stop(),
-    gone: cluster.gone.then(() => ''),
-  });
+  const cluster = await startOwnCluster(launch, folder, ports, secrets);
   await dropOwnDatabase(cluster);
-  rmSync(join(folder, 'mail'), { recursive: true, force: true });
-  const { ownerUrl, appUrl } = await makeOwnDatabase(cluster, secrets);
-  await prepareDatabase({ ownerUrl, appUser, queueNames });
+  rmSync(mailFolder(folder), { recursive: true, force: true });
+  const appUrl = await readyOwnDatabase(cluster, secrets);
   if (local.own.mail) await startMailCatcher(launch, folder, local);
-  say('Filling the demo.');
   await startApp(launch, folder, { ...local.env, DATABASE_URL: appUrl, DEMO: '1' });
 }

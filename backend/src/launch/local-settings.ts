@@ -86,11 +86,16 @@ export function signInEnv(local: LocalSettings, secrets: Secrets): Record<string
   };
 }
 
+/** Where caught letters are kept. */
+export function mailFolder(folder: string): string {
+  return join(folder, 'mail');
+}
+
 /** What the mail catcher needs; letters of earlier starts stay in the data folder. */
 export function mailCatcherEnv(local: LocalSettings, folder: string): Record<string, string> {
   return {
     MAIL_CATCHER_SMTP_PORT: String(local.smtpPort),
     MAIL_CATCHER_WEB_PORT: String(local.mailWebPort),
-    MAIL_CATCHER_FOLDER: join(folder, 'mail'),
+    MAIL_CATCHER_FOLDER: mailFolder(folder),
   };
 }

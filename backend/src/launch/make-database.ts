@@ -36,8 +36,11 @@ export async function makeUsers(
   }
 }
 
-/** Makes the database where it is missing; nobody but the two users may connect to it. */
-export async function makeDatabase(client: pg.Client, database: string): Promise<void> {
+/**
+ * Makes the database where it is missing; nobody but the two users may connect to it. Answers
+ * whether it was missing.
+ */
+export async function makeDatabase(client: pg.Client, database: string): Promise<boolean> {
   const name = pg.escapeIdentifier(database);
   const found = await client.query('SELECT FROM pg_database WHERE datname = $1', [database]);
   if (found.rowCount === 0) {
@@ -45,4 +48,5 @@ export async function makeDatabase(client: pg.Client, database: string): Promise
   }
   await client.query(`REVOKE ALL ON DATABASE ${name} FROM PUBLIC`);
   await client.query(`GRANT CONNECT ON DATABASE ${name} TO ${pg.escapeIdentifier(appUser)}`);
+  return found.rowCount === 0;
 }

@@ -10,10 +10,12 @@ import type { Secrets } from './secrets.ts';
 
 const database = 'ebbfolk';
 
-/** The addresses of one database, for its owner and for the application. */
-export interface DatabaseUrls {
+/** One database, for its owner and for the application. */
+export interface OwnDatabase {
   readonly ownerUrl: string;
   readonly appUrl: string;
+  /** Whether it was made just now. */
+  readonly isNew: boolean;
 }
 
 /** Starts the PostgreSQL server of this data folder, made there at the first start. */
@@ -31,12 +33,13 @@ export function openOwnCluster(folder: string, ports: Ports, secrets: Secrets): 
 }
 
 /** Makes the users and the database where they are missing. It may be empty still. */
-export async function makeOwnDatabase(cluster: Cluster, secrets: Secrets): Promise<DatabaseUrls> {
-  await withClient(cluster.superuserUrl, async (client) => {
+export async function makeOwnDatabase(cluster: Cluster, secrets: Secrets): Promise<OwnDatabase> {
+  const isNew = await withClient(cluster.superuserUrl, async (client) => {
     await makeUsers(client, { owner: secrets.ownerPassword, app: secrets.appPassword });
-    await makeDatabase(client, database);
+    return makeDatabase(client, database);
   });
   return {
+    isNew,
     ownerUrl: cluster.url(ownerUser, secrets.ownerPassword, database),
     appUrl: cluster.url(appUser, secrets.appPassword, database),
   };

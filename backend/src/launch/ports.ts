@@ -5,23 +5,24 @@ import { z } from 'zod';
 import { readKept, writeKept } from './kept-file.ts';
 import { CannotStart } from './say.ts';
 
-/** Where things listen on this computer unless something else does: the first choice of each. */
-const firstChoice = {
-  page: 3700,
-  signIn: 3701,
-  mailWeb: 3702,
-  smtp: 3703,
-  postgres: 3704,
-  appBehindPage: 3705,
+/** Where things listen unless something else does, counted from the first port. */
+const placeInRow = {
+  page: 0,
+  signIn: 1,
+  mailWeb: 2,
+  smtp: 3,
+  postgres: 4,
+  appBehindPage: 5,
 } as const;
 
-export type PortName = keyof typeof firstChoice;
+export type PortName = keyof typeof placeInRow;
 
 const shape = z.partialRecord(
-  z.enum(Object.keys(firstChoice) as [PortName, ...PortName[]]),
+  z.enum(Object.keys(placeInRow) as [PortName, ...PortName[]]),
   z.int().min(1).max(65_535),
 );
 
+const usualFirstPort = 3_700;
 const waitForFreeMs = 3_000;
 const highestPort = 65_535;
 
@@ -41,7 +42,8 @@ export interface Ports {
   forget(name: PortName): void;
 }
 
-export function keptPorts(folder: string): Ports {
+/** The ports kept in a data folder; the first choices are `firstPort` and those after it. */
+export function keptPorts(folder: string, firstPort = firstPortWished()): Ports {
   const file = join(folder, 'ports.json');
   const kept = readKept(file, shape) ?? {};
   const taken = new Set<number>();
@@ -64,11 +66,11 @@ export function keptPorts(folder: string): Ports {
     async choose(name) {
       const before = kept[name];
       if (before !== undefined && (await becomesFree(before))) return remember(name, before);
-      return remember(name, await nextFree(firstChoice[name]));
+      return remember(name, await nextFree(firstPort + placeInRow[name]));
     },
     async keep(name) {
       const before = kept[name];
-      if (before === undefined) return remember(name, await nextFree(firstChoice[name]));
+      if (before === undefined) return remember(name, await nextFree(firstPort + placeInRow[name]));
       if (await becomesFree(before)) return remember(name, before);
       throw new CannotStart(
         `Port ${before} is where people of this database sign in, and another program listens there. Stop that program, or begin anew with: npm run demo:reset`,
@@ -94,6 +96,13 @@ export function anyFreePort(): Promise<number> {
       });
     });
   });
+}
+
+/** EBBFOLK_FIRST_PORT names another row of ports, for two checkouts on one computer. */
+function firstPortWished(): number {
+  const wished = Number(process.env['EBBFOLK_FIRST_PORT'] || usualFirstPort);
+  if (Number.isInteger(wished) && wished > 0 && wished < highestPort) return wished;
+  throw new CannotStart('EBBFOLK_FIRST_PORT must be a port number.');
 }
 
 async function becomesFree(port: number): Promise<boolean> {

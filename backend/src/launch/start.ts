@@ -1,7 +1,3 @@
-import { readFileSync } from 'node:fs';
-import { join } from 'node:path';
-import { prepareDatabase } from '#backend/database/prepare-database.ts';
-import { queueNames } from '#backend/jobs.ts';
 import { readSettings } from '#backend/settings.ts';
 import { demoPeople } from '#shared/demo/demo-people.ts';
 import {
@@ -17,7 +13,6 @@ import { Launch } from './launch.ts';
 import { localSettings } from './local-settings.ts';
 import type { LocalSettings } from './local-settings.ts';
 import { appUser } from './make-database.ts';
-import { makeOwnDatabase, openOwnCluster } from './own-database.ts';
 import { keptPorts } from './ports.ts';
 import type { Ports } from './ports.ts';
 import { takePlace, whoIsRunning } from './running.ts';
@@ -88,11 +83,7 @@ async function bringUp(launch: Launch, folder: string, place: Place): Promise<vo
     isWatching ? null : buildFrontend(launch.stopping.signal),
     readyDatabase(start),
   ]);
-  say(
-    isDemo
-      ? 'Starting the application. The first time, it makes the demo.'
-      : 'Starting the application.',
-  );
+  say('Starting the application.');
   await startPages(start, { ...local.env, DATABASE_URL: databaseUrl });
   place.tellAddress(baseUrl);
   process.stdout.write(welcome(baseUrl, local, isDemo));
@@ -100,25 +91,13 @@ async function bringUp(launch: Launch, folder: string, place: Place): Promise<vo
 
 /** Brings the database up to date, and answers where the application finds it. */
 async function readyDatabase({ launch, folder, ports, secrets, local }: Start): Promise<string> {
-  if (local.own.postgres) {
-    const cluster = await openOwnCluster(folder, ports, secrets);
-    const logFile = join(folder, 'log', 'postgres.log');
-    await launch.add({
-      name: 'PostgreSQL',
-      stop: () => cluster.stop(),
-      gone: cluster.gone.then(() => readFileSync(logFile, 'utf8').split('\n').slice(-8).join('\n')),
-    });
-    const { ownerUrl, appUrl } = await makeOwnDatabase(cluster, secrets);
-    await prepareDatabase({ ownerUrl, appUser, queueNames });
-    return appUrl;
-  }
-  const appUrl = local.env['DATABASE_URL'] ?? '';
-  const ownerUrl = local.env['DATABASE_OWNER_URL'];
-  if (ownerUrl !== undefined) {
-    const { username } = new URL(appUrl);
-    await prepareDatabase({ ownerUrl, appUser: decodeURIComponent(username), queueNames });
-  }
-  return appUrl;
+  // What migrates takes a second to load, which the other parts need not wait for.
+  const ready = await import('./ready-database.ts');
+  if (!local.own.postgres) return ready.readyGivenDatabase(local.env);
+  return ready.readyOwnDatabase(
+    await ready.startOwnCluster(launch, folder, ports, secrets),
+    secrets,
+  );
 }
 
 /** Starts the application; while its files are edited, behind a server for the pages. */

@@ -1,7 +1,7 @@
 import type { ShoreRules } from '#shared/domain/tides/shore-water.ts';
 
 /** The tide station whose tides the invented shores borrow. */
-export const demoTideStationId = 'ticon/whitby-whi-gbr-bodc';
+export const demoTideStationId = 'ticon/north_shields-nsh-gbr-bodc';
 export const demoZone = 'Europe/London';
 
 const window = {
@@ -23,28 +23,28 @@ export const demoShores: readonly (Omit<ShoreRules, 'zone'> & {
   {
     ...window,
     name: 'Gull Ledges',
-    latitude: 54.72,
-    longitude: -0.21,
-    workingLevelM: 2.2,
-    cutOffLevelM: 3.4,
+    latitude: 55.06,
+    longitude: -1.18,
+    workingLevelM: 2.0,
+    cutOffLevelM: 3.1,
     meetingPlace: 'Blue hut at the head of the slipway. The slip itself stays clear.',
   },
   {
     ...window,
     name: 'Kettle Reef',
-    latitude: 54.75,
-    longitude: -0.18,
-    workingLevelM: 2.0,
-    cutOffLevelM: 3.2,
+    latitude: 55.09,
+    longitude: -1.15,
+    workingLevelM: 1.8,
+    cutOffLevelM: 2.9,
     meetingPlace: 'Grass above the steps, by the notice board.',
   },
   {
     ...window,
     name: 'Skerrow Flat',
-    latitude: 54.69,
-    longitude: -0.25,
-    workingLevelM: 2.4,
-    cutOffLevelM: 3.5,
+    latitude: 55.03,
+    longitude: -1.22,
+    workingLevelM: 2.2,
+    cutOffLevelM: 3.3,
     meetingPlace: 'Gate at the end of the dune path.',
   },
 ];

@@ -96,7 +96,7 @@ async function seedPeople(ctx: AppContext, tx: Tx, made: Made): Promise<readonly
     name,
     email,
     bornOn: adultBornOn,
-    roles: roles as readonly Role[],
+    roles: roles,
     state: 'invited' as const,
   }));
   const crew = demoCrew.map(({ name, email, bornOn }) => ({

@@ -1,7 +1,7 @@
 import type { Instant } from '#shared/kernel/time.ts';
 import { clockAt } from '#shared/kernel/time.ts';
 import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
-import type { Box, Label, LabelSize } from './label-box.ts';
+import type { Box, Label } from './label-box.ts';
 import { boxOf, labelWidthPx, meet } from './label-box.ts';
 import type { Plot, WaterAxis, WaterPoint } from './water-curve.ts';
 import { cutCurve, heightAt, xOf, yOf } from './water-curve.ts';
@@ -223,11 +223,8 @@ function placeLowWater(
     const [x1, x2] = anchor === 'end' ? [x - spanPx, x] : [x, x + spanPx];
     return { x, anchor, y: highestY(plot, facts.curve, x1, x2) - 9 * scale };
   });
-  place(
-    'low-water',
-    ...places.map((at) => ({ ...at, y: at.y - 18 * scale, size: 'low' as LabelSize })),
-  );
-  place('low-height', ...places.map((at) => ({ ...at, size: 'axis' as LabelSize })));
+  place('low-water', ...places.map((at) => ({ ...at, y: at.y - 18 * scale, size: 'low' })));
+  place('low-height', ...places.map((at) => ({ ...at, size: 'axis' })));
 }
 
 function placeSun(

@@ -18,7 +18,7 @@ export function PageHeader(props: {
   readonly who: ReactNode;
 }) {
   return (
-    <header className="flex min-h-14 items-center gap-8 border-hair px-4 wide:min-h-16 wide:border-b wide:px-page">
+    <header className="flex min-h-14 items-center gap-x-8 max-wide:flex-wrap border-hair px-4 wide:min-h-16 wide:border-b wide:px-page">
       <Link
         to="/"
         className="flex min-w-0 items-center gap-2.5 py-2 text-ink no-underline"

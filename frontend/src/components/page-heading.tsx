@@ -8,7 +8,14 @@ const FIRST_PAGE = 'default';
  * The heading of a page. It takes the focus when the page is reached from within, so that speech
  * reads where one is; not on the first page, where the browser does so itself.
  */
-export function PageHeading({ children }: { children: ReactNode }) {
+export function PageHeading({
+  children,
+  isSmall = false,
+}: {
+  readonly children: ReactNode;
+  /** Over a page that is one drawing, such as the month. */
+  readonly isSmall?: boolean;
+}) {
   const ref = useRef<HTMLHeadingElement>(null);
   const { key, pathname } = useLocation();
   const isFirstPage = useRef(key === FIRST_PAGE);
@@ -16,7 +23,7 @@ export function PageHeading({ children }: { children: ReactNode }) {
     if (!isFirstPage.current) ref.current?.focus();
   }, [pathname]);
   return (
-    <h1 ref={ref} tabIndex={-1} className="text-2xl wide:text-3xl">
+    <h1 ref={ref} tabIndex={-1} className={isSmall ? 'text-2xl' : 'text-2xl wide:text-3xl'}>
       {children}
     </h1>
   );

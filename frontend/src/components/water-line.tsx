@@ -1,4 +1,5 @@
 import type { Instant } from '#shared/kernel/time.ts';
+import { textScale } from './root-font.ts';
 import type { WaterAxis, WaterPoint } from './water-curve.ts';
 import { heightAt, linePath, sandPath, waterPath, xOf, yOf } from './water-curve.ts';
 
@@ -8,6 +9,7 @@ interface WaterLineProps {
   readonly fromAt: Instant;
   readonly untilAt: Instant;
   readonly widthPx: number;
+  /** At the usual size of text; larger words over the water take more. */
   readonly heightPx: number;
   /** What it says aloud. */
   readonly label: string;
@@ -23,8 +25,11 @@ const HALF_CAPTION_PX = 42;
 
 /** The small water line of one day, drawn at the size that it is shown in. */
 export function WaterLine(props: WaterLineProps) {
-  const { curve, axis, fromAt, untilAt, widthPx, heightPx, label, sand, caption, nowAt } = props;
-  const topPx = caption === undefined ? 3 : CAPTION_PX;
+  const { curve, axis, fromAt, untilAt, widthPx, label, sand, caption, nowAt } = props;
+  const scale = textScale();
+  const captionPx = caption === undefined ? 0 : CAPTION_PX * scale;
+  const heightPx = props.heightPx + Math.max(0, captionPx - CAPTION_PX);
+  const topPx = caption === undefined ? 3 : captionPx;
   const plot = { fromAt, untilAt, widthPx, topPx, basePx: heightPx - 3, axis };
   const ceilingPx = caption === undefined ? topPx : topPx - 2;
   const nowM = nowAt === undefined ? null : heightAt(curve, nowAt);
@@ -49,7 +54,7 @@ export function WaterLine(props: WaterLineProps) {
       )}
       <path
         className="fill-none stroke-deep"
-        strokeWidth={heightPx < 40 ? 1.5 : 1.75}
+        strokeWidth={props.heightPx < 40 ? 1.5 : 1.75}
         strokeLinejoin="round"
         d={linePath(plot, curve)}
       />
@@ -68,8 +73,8 @@ export function WaterLine(props: WaterLineProps) {
       {caption !== undefined && (
         <text
           className="fill-ink text-xs font-semibold tabular-nums"
-          y="11"
-          {...captionPlace(xOf(plot, caption.at), widthPx)}
+          y={captionPx - 6}
+          {...captionPlace(xOf(plot, caption.at), widthPx, HALF_CAPTION_PX * scale)}
         >
           {caption.clock}
           <tspan className="fill-barnacle font-normal"> {caption.height}</tspan>
@@ -82,9 +87,10 @@ export function WaterLine(props: WaterLineProps) {
 function captionPlace(
   x: number,
   widthPx: number,
+  halfPx: number,
 ): { x: number; textAnchor: 'start' | 'middle' | 'end' } {
-  if (x < HALF_CAPTION_PX) return { x: 0, textAnchor: 'start' };
-  if (x > widthPx - HALF_CAPTION_PX) return { x: widthPx, textAnchor: 'end' };
+  if (x < halfPx) return { x: 0, textAnchor: 'start' };
+  if (x > widthPx - halfPx) return { x: widthPx, textAnchor: 'end' };
   return { x, textAnchor: 'middle' };
 }
 

@@ -88,7 +88,7 @@ function MonthHeading({ monthOn, today }: { monthOn: CalendarDay; today: Calenda
   return (
     <>
       <span className="min-w-34.5" aria-live="polite">
-        <PageHeading>{formatDay(monthOn, 'monthYear')}</PageHeading>
+        <PageHeading isSmall>{formatDay(monthOn, 'monthYear')}</PageHeading>
       </span>
       <MonthSteps
         before={{ to: to(-1), name: formatDay(addMonths(monthOn, -1), 'monthYear') }}

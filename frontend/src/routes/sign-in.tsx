@@ -24,7 +24,7 @@ export function Component() {
       foot={data?.fortnight ? <FortnightWater fortnight={data.fortnight} /> : null}
     >
       <PageTitle>Sign in</PageTitle>
-      <div className="mt-7 grid items-start gap-7 wide:mt-19 wide:grid-cols-[1fr_25rem] wide:gap-22.5">
+      <div className="mt-7 grid grid-cols-1 items-start gap-7 wide:mt-19 wide:grid-cols-[1fr_25rem] wide:gap-22.5">
         <div>
           <h1 className="max-w-[11.5em] text-headline-small tracking-headline text-balance wide:text-headline">
             Who is on the shore when the water is out

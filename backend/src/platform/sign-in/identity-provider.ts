@@ -106,12 +106,14 @@ async function discover(settings: {
 }): Promise<client.Configuration> {
   const issuer = new URL(settings.issuer);
   const isLoopback = ['localhost', '127.0.0.1', '[::1]'].includes(issuer.hostname);
+  // eslint-disable-next-line @typescript-eslint/no-deprecated -- marked so to stand out; loopback only
+  const plainHttp = { execute: [client.allowInsecureRequests] };
   const config = await client.discovery(
     issuer,
     settings.clientId,
     { client_secret: settings.clientSecret, [client.clockTolerance]: clockToleranceSeconds },
     client.ClientSecretBasic(settings.clientSecret),
-    issuer.protocol === 'http:' && isLoopback ? { execute: [client.allowInsecureRequests] } : {},
+    issuer.protocol === 'http:' && isLoopback ? plainHttp : {},
   );
   client.enableNonRepudiationChecks(config);
   return config;

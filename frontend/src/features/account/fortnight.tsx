@@ -12,30 +12,25 @@ import {
 } from '#frontend/components/water-curve.ts';
 import { textScale } from '#frontend/components/root-font.ts';
 import { clockOfWater } from '#frontend/words/tide-words.ts';
-import { listed } from '#frontend/words/number-words.ts';
+import { counted, listed } from '#frontend/words/number-words.ts';
 import type { CalendarDay, Instant } from '#shared/kernel/time.ts';
 import { dayAt, formatDay, fromIso } from '#shared/kernel/time.ts';
 import type { FrontDoorView } from './account.queries.ts';
 
 type Fortnight = NonNullable<FrontDoorView['fortnight']>;
 
-const TALL_PX = 330;
-const LOW_PX = 200;
+const HEIGHT_PX = 330;
 /** The width of a day under which its words would touch the next day's. */
 const LEAST_DAY_PX = 66;
-const DAYS = 14;
-const HALF_DAY_MS = 12 * 3_600_000;
+const LEAST_DAYS = 4;
+const DAY_MS = 86_400_000;
 
 /** The home shore's water for a fortnight, the sessions' posts standing in it. */
 export function FortnightWater({ fortnight }: { fortnight: Fortnight }) {
   const [ref, widthPx] = useMeasuredWidth<HTMLElement>();
-  const scale = textScale();
-  const hasWords = widthPx !== null && widthPx / DAYS >= LEAST_DAY_PX * scale;
   return (
     <figure ref={ref} className="mt-8 min-h-48">
-      {widthPx !== null && widthPx > 0 && (
-        <Drawing fortnight={fortnight} widthPx={widthPx} hasWords={hasWords} scale={scale} />
-      )}
+      {widthPx !== null && widthPx > 0 && <Drawing fortnight={fortnight} widthPx={widthPx} />}
       <figcaption className="bg-shallow px-4 pb-2 text-xs wide:px-page">
         {`Tides predicted from ${fortnight.source.stationName}, heights above ${fortnight.source.datum}. ${fortnight.source.attribution} Predictions are predictions: the official tide table and the shore leader on the spot decide.`}
       </figcaption>
@@ -43,25 +38,23 @@ export function FortnightWater({ fortnight }: { fortnight: Fortnight }) {
   );
 }
 
-function Drawing(props: {
-  readonly fortnight: Fortnight;
-  readonly widthPx: number;
-  readonly hasWords: boolean;
-  readonly scale: number;
-}) {
-  const { fortnight, widthPx, hasWords, scale } = props;
-  const { zone, sessions, neaps } = fortnight;
+function Drawing({ fortnight, widthPx }: { fortnight: Fortnight; widthPx: number }) {
+  const scale = textScale();
+  const { zone } = fortnight;
   const curve = readCurve(fortnight.curve);
-  const first = curve[0];
-  const last = curve[curve.length - 1];
-  if (first === undefined || last === undefined) return null;
+  const span = spanShown(fortnight, curve, widthPx / (LEAST_DAY_PX * scale));
+  if (span === null) return null;
+  const isShown = (iso: string): boolean =>
+    fromIso(iso) > span.fromAt && fromIso(iso) < span.untilAt;
+  const sessions = fortnight.sessions.filter(({ lowWaterAt }) => isShown(lowWaterAt));
+  const neaps = fortnight.neaps.filter(({ at }) => isShown(at));
+  const hasWords = widthPx / span.days >= LEAST_DAY_PX * scale;
   const wordsPx = hasWords ? 44 * scale : 0;
-  const heightPx = (hasWords ? TALL_PX - 60 : LOW_PX) + wordsPx;
+  const heightPx = HEIGHT_PX - 60 + wordsPx;
   const plot: Plot = {
-    fromAt: first.at,
-    untilAt: last.at,
+    ...span,
     widthPx,
-    topPx: wordsPx + (hasWords ? 34 : 24),
+    topPx: wordsPx + 34,
     basePx: heightPx - 24,
     axis: fortnight.axis,
   };
@@ -74,7 +67,7 @@ function Drawing(props: {
       width={widthPx}
       height={heightPx}
       role="img"
-      aria-label={spoken(fortnight)}
+      aria-label={spoken(span.days, sessions, neaps, zone)}
     >
       <path className="fill-shallow" d={waterPath(plot, curve, heightPx)} />
       {sessions.map(({ startsAt, offTheShoreBy }) => (
@@ -104,7 +97,7 @@ function Drawing(props: {
         );
       })}
       {hasWords &&
-        oneADay(fortnight).map(({ on, at }) => (
+        oneADay(sessions, zone).map(({ on, at }) => (
           <TwoLines
             key={on}
             x={xOf(plot, at)}
@@ -137,7 +130,7 @@ function Drawing(props: {
 
 /** The y of the highest water within half a day of a moment. */
 function highestBeside(plot: Plot, curve: readonly WaterPoint[], at: Instant): number {
-  const beside = cutCurve(curve, at - HALF_DAY_MS, at + HALF_DAY_MS);
+  const beside = cutCurve(curve, at - DAY_MS / 2, at + DAY_MS / 2);
   return yOf(plot, Math.max(...beside.map(({ heightM }) => heightM)));
 }
 
@@ -167,8 +160,31 @@ function TwoLines(props: {
   );
 }
 
+/**
+ * The whole fortnight, or on a narrow page as many of its days as have room for their words,
+ * beginning the day before the first session.
+ */
+function spanShown(
+  { sessions }: Fortnight,
+  curve: readonly WaterPoint[],
+  room: number,
+): { fromAt: Instant; untilAt: Instant; days: number } | null {
+  const first = curve[0];
+  const last = curve[curve.length - 1];
+  if (first === undefined || last === undefined) return null;
+  const all = Math.round((last.at - first.at) / DAY_MS);
+  const days = Math.min(all, Math.max(LEAST_DAYS, Math.floor(room)));
+  const earliest = sessions.map(({ lowWaterAt }) => fromIso(lowWaterAt) - 1.5 * DAY_MS);
+  const latestFromAt = last.at - days * DAY_MS;
+  const fromAt = days === all ? first.at : Math.max(first.at, Math.min(latestFromAt, ...earliest));
+  return { fromAt, untilAt: days === all ? last.at : fromAt + days * DAY_MS, days };
+}
+
 /** The first session of each day: two posts of one day share their words. */
-function oneADay({ sessions, zone }: Fortnight): { on: CalendarDay; at: Instant }[] {
+function oneADay(
+  sessions: Fortnight['sessions'],
+  zone: string,
+): { on: CalendarDay; at: Instant }[] {
   const days = new Map<CalendarDay, Instant>();
   for (const { lowWaterAt } of sessions) {
     const at = fromIso(lowWaterAt);
@@ -182,12 +198,20 @@ function shortDay(on: CalendarDay): string {
   return formatDay(on, 'short').split(' ').slice(0, 2).join(' ');
 }
 
-function spoken({ sessions, zone, neaps }: Fortnight): string {
-  const days = sessions.map(({ lowWaterAt }) => {
+function spoken(
+  days: number,
+  sessions: Fortnight['sessions'],
+  neaps: Fortnight['neaps'],
+  zone: string,
+): string {
+  const open = sessions.map(({ lowWaterAt }) => {
     const at = fromIso(lowWaterAt);
     return `${formatDay(dayAt(at, zone), 'long')}, low water ${clockOfWater(at, zone)}`;
   });
-  const open = days.length === 0 ? 'No session in it.' : `Sessions on ${listed(days)}.`;
   const quiet = neaps.map(({ at }) => formatDay(dayAt(fromIso(at), zone), 'long'));
-  return `The water for fourteen days. ${open}${quiet.length === 0 ? '' : ` Neaps on ${listed(quiet)}.`}`;
+  return [
+    `The water for ${counted(days, 'day')}.`,
+    open.length === 0 ? 'No session in them.' : `Sessions on ${open.join('; ')}.`,
+    ...(quiet.length === 0 ? [] : [`Neaps on ${listed(quiet)}.`]),
+  ].join(' ');
 }

@@ -35,7 +35,7 @@ function NextOpen({ next }: { next: NonNullable<FrontDoorView['nextSession']> })
   return (
     <>
       <div className="mb-2 flex flex-wrap items-end justify-between gap-x-4 gap-y-2">
-        <div className="min-w-52 flex-1">
+        <div className="min-w-0 flex-1 basis-52">
           <p className="mt-0.5 mb-1.5 text-3xl font-semibold tracking-title">
             {isOn ? 'On' : 'Stood down'}
           </p>

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { Limpet } from '#frontend/components/limpet.tsx';
 import type { LimpetLook } from '#frontend/components/limpet.tsx';
@@ -56,7 +57,7 @@ function NextSessionFacts({ view, session }: { view: CalendarView; session: Cale
   );
 }
 
-function Fact({ name, value }: { name: string; value: React.ReactNode }) {
+function Fact({ name, value }: { name: string; value: ReactNode }) {
   return (
     <div className="flex justify-between gap-3 py-0.5">
       <dt className="text-barnacle">{name}</dt>

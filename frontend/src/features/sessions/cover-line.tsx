@@ -9,8 +9,10 @@ export function CoverLine(props: {
   readonly hasEnded: boolean;
   readonly cover: Cover;
   readonly limpetPx?: number;
+  /** In a narrow cell: what is in doubt stands under the gaps. */
+  readonly isStacked?: boolean;
 }) {
-  const { state, hasEnded, cover, limpetPx = 14 } = props;
+  const { state, hasEnded, cover, limpetPx = 14, isStacked = false } = props;
   if (state === 'stood-down') return <span>Stood down</span>;
   const isPast = hasEnded || state === 'closed';
   return (
@@ -19,19 +21,19 @@ export function CoverLine(props: {
         <LimpetRow looks={cover.looks} sizePx={limpetPx} isPast={isPast} />
       </span>
       {state === 'draft' && 'Draft, '}
-      {isPast ? 'Done' : openWords(cover)}
+      {isPast ? 'Done' : openWords(cover, isStacked)}
     </span>
   );
 }
 
-function openWords({ gaps, inDoubt }: Cover): ReactNode {
+function openWords({ gaps, inDoubt }: Cover, isStacked: boolean): ReactNode {
   if (gaps === 0 && inDoubt === 0) return 'Covered';
   return (
     <>
       {gaps > 0 && (
         <b className="whitespace-nowrap text-anemone">{gaps === 1 ? '1 gap' : `${gaps} gaps`}</b>
       )}
-      {gaps > 0 && inDoubt > 0 && ', '}
+      {gaps > 0 && inDoubt > 0 && (isStacked ? <br /> : ', ')}
       {inDoubt > 0 && <b className="whitespace-nowrap text-wrack">{inDoubt} in doubt</b>}
     </>
   );

@@ -1,3 +1,4 @@
+import { useLayoutEffect, useRef } from 'react';
 import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
 import type { CalendarSession } from '#shared/contracts/sessions.ts';
 import type { Instant } from '#shared/kernel/time.ts';
@@ -34,9 +35,16 @@ export function MonthCell(props: {
   const [date, month] = formatDay(day.on, 'dayMonth').split(' ');
   const low = day.home?.daylightLow ?? null;
   const isToday = nowAt !== null;
+  const words = useRef<HTMLSpanElement>(null);
+  useLayoutEffect(() => {
+    // FullCalendar names the cell by its date alone, which would hide the words in it.
+    words.current?.closest('.fc-daygrid-day-number')?.removeAttribute('aria-label');
+  }, []);
   return (
     <>
-      <span className="sr-only">{dayInWords(day, scale.zone)}</span>
+      <span ref={words} className="sr-only">
+        {dayInWords(day, scale.zone)}
+      </span>
       <span className="month-date" aria-hidden>
         <span className={isOfMonth && !isToday ? 'text-ink' : 'text-barnacle'}>
           <span

@@ -45,7 +45,7 @@ interface MonthGridProps {
 /** What FullCalendar is given to show in a cell: a sign, or the words for those left out. */
 type Shown =
   | { readonly kind: 'sign'; readonly session: CalendarSession; readonly isLast: boolean }
-  | { readonly kind: 'more'; readonly count: number; readonly hasGap: boolean };
+  | { readonly kind: 'more'; readonly count: number; readonly withGap: number };
 
 /**
  * The month. FullCalendar keeps its dates, its table and its events; everything seen is ours. All
@@ -162,7 +162,7 @@ function eventContent(
   }
   return (
     <span className="session-more">
-      {`and ${numberWord(what.count)} more${what.hasGap ? ', with a gap' : ''}`}
+      {`and ${numberWord(what.count)} more${what.withGap === 0 ? '' : `, ${numberWord(what.withGap)} with a gap`}`}
     </span>
   );
 }
@@ -183,8 +183,8 @@ function shownOf(
       what: { kind: 'sign', session, isLast: order === sessions.length - 1 } satisfies Shown,
     }));
     if (rest.length === 0) return signs;
-    const hasGap = rest.some(({ slots }) => slots.some(({ state }) => state === 'gap'));
-    const more = { kind: 'more', count: rest.length, hasGap } satisfies Shown;
+    const withGap = rest.filter(({ slots }) => slots.some(({ state }) => state === 'gap')).length;
+    const more = { kind: 'more', count: rest.length, withGap } satisfies Shown;
     return [...signs, { id: `more-${on}`, on, order: signs.length, what: more }];
   });
 }

@@ -43,6 +43,7 @@ export function SessionSign(props: {
           hasEnded={session.hasEnded}
           cover={cover}
           limpetPx={LIMPET_PX}
+          isStacked
         />
       </span>
       {isLast && cover.isYours && !isDown && !isOver && (

@@ -13,8 +13,9 @@ export function ClaimButton(props: {
   return (
     <div className="flex-none text-right">
       <Button look="line" isBusy={claim.isPending} onPress={() => claim.mutate()}>
-        {claim.isPending ? 'Claiming' : 'Claim'}
-        <span className="sr-only"> {props.whole}</span>
+        <span>
+          {claim.isPending ? 'Claiming' : 'Claim'} <span className="sr-only">{props.whole}</span>
+        </span>
       </Button>
       {claim.error !== null && (
         <div className="max-w-56 text-left">
