@@ -8,7 +8,7 @@ import { answerFont } from './fonts.ts';
 import { choosePage, contentPolicy, errorPage, signedOutPage, signOutPage } from './pages.ts';
 import { claimsOf, findPerson } from './people.ts';
 
-export interface DevIdpWish {
+interface DevIdpWish {
   /** 0: any free port. */
   readonly port: number;
   readonly clientId: string;
@@ -209,5 +209,5 @@ function asProviderError(error: unknown): {
 
 function makeSigningKey(): JWK {
   const { privateKey } = generateKeyPairSync('rsa', { modulusLength: 2048 });
-  return { ...privateKey.export({ format: 'jwk' }), use: 'sig', alg: 'RS256' } as JWK;
+  return { ...privateKey.export({ format: 'jwk' }), use: 'sig', alg: 'RS256' };
 }

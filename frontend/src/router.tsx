@@ -5,6 +5,7 @@ import { LoadingWash } from './components/loading-wash.tsx';
 import { accountQueries } from './features/account/account.queries.ts';
 import { ErrorPage } from './routes/error.tsx';
 import { NotFoundPage } from './routes/not-found.tsx';
+import { SignedIn } from './routes/signed-in.tsx';
 
 /** Where somebody signs in who was on the way to a page of this site. */
 export function signInPage(returnTo: string): string {
@@ -37,10 +38,17 @@ export function routes(queryClient: QueryClient): RouteObject[] {
           loader: needsAccount,
           // The account is asked for once; the cache keeps it fresh from then on.
           shouldRevalidate: () => false,
-          lazy: () => import('./routes/signed-in.tsx'),
+          Component: SignedIn,
           children: [
             { index: true, lazy: () => import('./routes/calendar.tsx') },
             { path: '/sessions/:sessionId', lazy: () => import('./routes/session.tsx') },
+            { path: '/season-plans', lazy: () => import('./routes/season-plans.tsx') },
+            { path: '/season-plans/new', lazy: () => import('./routes/season-plan.tsx') },
+            { path: '/season-plans/:planId', lazy: () => import('./routes/season-plan.tsx') },
+            { path: '/shores', lazy: () => import('./routes/shores.tsx') },
+            { path: '/shores/new', lazy: () => import('./routes/shore.tsx') },
+            { path: '/shores/:shoreId', lazy: () => import('./routes/shore.tsx') },
+            { path: '/tide-tables', lazy: () => import('./routes/tide-tables.tsx') },
             { path: '*', Component: NotFoundPage },
           ],
         },

@@ -275,7 +275,7 @@ describe('entities and migrations', () => {
     const clone = await cloneDatabase();
     const owner = await ownerDataSource(clone.ownerUrl).initialize();
     try {
-      await owner.undoLastMigration();
+      for (const _migration of owner.migrations) await owner.undoLastMigration();
       const left: { name: string }[] = await owner.query(
         `SELECT relname AS name FROM pg_class
           WHERE relkind = 'r' AND relnamespace = 'public'::regnamespace`,

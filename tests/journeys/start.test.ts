@@ -38,14 +38,15 @@ function start(): Run {
   const child = spawn(process.execPath, ['--import', 'tsx', 'backend/src/launch/start.ts'], {
     cwd: projectRoot,
     env: { PATH, HOME, EBBFOLK_DATA: folder, EBBFOLK_FIRST_PORT: firstPort },
-    stdio: ['ignore', 'pipe', 'pipe'],
+    // With a channel it stops when this process is gone, however that comes about.
+    stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
   });
   let output = '';
   const add = (chunk: Buffer): void => {
     output += chunk.toString();
   };
-  child.stdout.on('data', add);
-  child.stderr.on('data', add);
+  child.stdout?.on('data', add);
+  child.stderr?.on('data', add);
   return {
     process: child,
     ended: once(child, 'exit').then(([code]) => code as number | null),

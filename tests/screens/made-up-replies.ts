@@ -24,6 +24,7 @@ const source = {
   longitude: -1.14,
   datum: 'LAT',
   attribution: 'Invented for these pages.',
+  table: null,
 };
 
 /** An id that is told apart by a number. */

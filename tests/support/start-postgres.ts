@@ -1,10 +1,11 @@
-import { rmSync } from 'node:fs';
+import { spawn } from 'node:child_process';
+import { once } from 'node:events';
 import { join } from 'node:path';
 import type { TestProject } from 'vitest/node';
 import { prepareDatabase } from '#backend/database/prepare-database.ts';
 import { queueNames } from '#backend/jobs.ts';
 import { throwAwayHome } from '#backend/launch/cluster-home.ts';
-import { lockHolder, openCluster } from '#backend/launch/cluster.ts';
+import { openCluster } from '#backend/launch/cluster.ts';
 import { findOrInstallPostgres } from '#backend/launch/find-postgres.ts';
 import {
   appUser,
@@ -25,13 +26,8 @@ const templateDatabase = 'template_of_tests';
  */
 export default async function startPostgres(project: TestProject): Promise<() => Promise<void>> {
   const home = throwAwayHome();
+  const clearAway = clearAwayWithThisProcess(home.folder);
   const passwords = makeSecrets();
-  // A run that is broken off calls no teardown.
-  const endAtOnce = (): void => {
-    const holder = lockHolder(home);
-    if (holder !== null) process.kill(holder.pid, 'SIGQUIT');
-  };
-  process.once('exit', endAtOnce);
   try {
     const cluster = await openCluster({
       programs: findOrInstallPostgres(),
@@ -54,14 +50,37 @@ export default async function startPostgres(project: TestProject): Promise<() =>
       templateDatabase,
     });
     return async () => {
-      process.off('exit', endAtOnce);
       await cluster.stop();
-      rmSync(home.folder, { recursive: true });
+      await clearAway();
     };
   } catch (error) {
-    process.off('exit', endAtOnce);
-    endAtOnce();
-    rmSync(home.folder, { recursive: true, force: true });
+    await clearAway();
     throw error;
   }
+}
+
+/**
+ * A shell that waits for the end of its input, which comes with the end of this process, however
+ * it ends; then it ends the server, if one is left, and removes the folder. Answers how to have
+ * that done at once.
+ */
+function clearAwayWithThisProcess(folder: string): () => Promise<void> {
+  const script = `
+    cat > /dev/null
+    if [ -f "$1/cluster/postmaster.pid" ]; then
+      kill -QUIT "$(head -n 1 "$1/cluster/postmaster.pid")"
+      while [ -f "$1/cluster/postmaster.pid" ]; do sleep 0.1; done
+    fi
+    rm -rf "$1"`;
+  const shell = spawn('/bin/sh', ['-c', script, 'clear-away', folder], {
+    stdio: ['pipe', 'ignore', 'inherit'],
+    detached: true,
+  });
+  shell.unref();
+  return async () => {
+    shell.ref();
+    const ended = once(shell, 'exit');
+    shell.stdin.end();
+    await ended;
+  };
 }

@@ -34,6 +34,7 @@ export interface TestApp extends Pick<App, 'ctx'> {
 export interface Requests {
   get(path: string): Test;
   post(path: string, body?: object): Test;
+  put(path: string, body: object): Test;
 }
 
 export async function startTestApp(): Promise<TestApp> {
@@ -86,6 +87,7 @@ export async function startTestApp(): Promise<TestApp> {
       return {
         get: (path) => prepared(supertest(address).get(path)),
         post: (path, body = {}) => prepared(supertest(address).post(path)).send(body),
+        put: (path, body) => prepared(supertest(address).put(path)).send(body),
       };
     },
     async close() {

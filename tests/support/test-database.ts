@@ -5,7 +5,7 @@ import { inject } from 'vitest';
 import { withClient } from '#backend/launch/make-database.ts';
 
 /** The throw-away server of this run, as start-postgres.ts provides it. */
-export interface TestServer {
+interface TestServer {
   readonly superuserUrl: string;
   readonly ownerUrl: string;
   readonly appUrl: string;

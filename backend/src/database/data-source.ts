@@ -9,7 +9,14 @@ import { SessionEntity, SlotEntity } from './entities/session.entity.ts';
 import { ShoreEntity } from './entities/shore.entity.ts';
 import { SlotKindEntity, SlotKindRequirementEntity } from './entities/slot-kind.entity.ts';
 import { TrailEntity } from './entities/trail.entity.ts';
+import {
+  SeasonPlanEntity,
+  SeasonPlanExceptionEntity,
+  SeasonPlanSlotEntity,
+} from './entities/season-plan.entity.ts';
+import { TideTableEntity } from './entities/tide-table.entity.ts';
 import { FoundTheHouse1796000000000 } from './migrations/found-the-house.ts';
+import { PlanSeasons1796100000000 } from './migrations/plan-seasons.ts';
 
 const entities = [
   PersonEntity,
@@ -25,9 +32,13 @@ const entities = [
   ClaimEvidenceEntity,
   LetterEntity,
   TrailEntity,
+  SeasonPlanEntity,
+  SeasonPlanSlotEntity,
+  SeasonPlanExceptionEntity,
+  TideTableEntity,
 ];
 
-const migrations = [FoundTheHouse1796000000000];
+const migrations = [FoundTheHouse1796000000000, PlanSeasons1796100000000];
 
 // A plain date stays text ('2027-03-29'): as a Date it would shift with the zone of the process.
 pg.types.setTypeParser(pg.types.builtins.DATE, (text) => text);

@@ -1,6 +1,9 @@
 import type { FieldError, ProblemCode } from '#shared/contracts/problem.ts';
 import type { ReasonAgainst } from '#shared/contracts/reasons.ts';
 
+/** Something wrong beside one field of a request. */
+export type FieldProblem = FieldError;
+
 /** The one error that reaches a user. Anything else that is thrown is a bug: 500 and an id. */
 export class Problem extends Error {
   readonly code: ProblemCode;

@@ -28,7 +28,7 @@ export interface WebParts {
   readonly log: Logger;
 }
 
-const jsonLimit = '200kb';
+const usualBodyBytes = 200_000;
 const signInsPerMinute = 60;
 const assetsMaxAgeSeconds = 365 * 24 * 3600;
 
@@ -56,11 +56,11 @@ export function web(parts: WebParts): Express {
   );
   app.use('/auth', rateLimit({ windowMs: 60_000, limit: signInsPerMinute, handler: tooMany }));
   app.use(['/api', '/auth'], noStore, sameOrigin(base.origin), jsonOnly);
-  app.use('/api', express.json({ limit: jsonLimit, strict: true }));
   app.use(['/api', '/auth'], parts.sessions);
   for (const route of parts.routes) {
     app[route.contract.method](
       route.contract.path,
+      express.json({ limit: route.contract.longestBodyBytes ?? usualBodyBytes, strict: true }),
       async (request: Request, response: Response) => {
         const actor = await whoIsSignedIn(request, parts.now(), parts.findActor);
         const signIn = signInOf(request, parts.now);
@@ -177,6 +177,7 @@ function ofLibrary(error: unknown): Problem {
   const status: unknown =
     typeof error === 'object' && error !== null ? Reflect.get(error, 'status') : 0;
   if (status === 404) return new Problem('not-found', 'There is nothing at this address');
+  if (status === 413) return new Problem('too-large', 'This is more than can be taken at once');
   if (typeof status === 'number' && status >= 400 && status < 500) {
     return new Problem('not-understood', 'The request could not be read');
   }

@@ -17,7 +17,7 @@ import type { Account, ClusterHome } from './cluster-home.ts';
 import type { PostgresPrograms } from './find-postgres.ts';
 import { CannotStart } from './say.ts';
 
-export const superuser = 'ebbfolk_superuser';
+const superuser = 'ebbfolk_superuser';
 
 /** A PostgreSQL server on 127.0.0.1 that answers. */
 export interface Cluster {
@@ -31,7 +31,7 @@ export interface Cluster {
   stop(): Promise<void>;
 }
 
-export interface ClusterWish {
+interface ClusterWish {
   readonly programs: PostgresPrograms;
   readonly home: ClusterHome;
   readonly superuserPassword: string;
@@ -84,13 +84,6 @@ export async function openCluster(wish: ClusterWish): Promise<Cluster> {
     if (isGone) throw new CannotStart(`PostgreSQL did not start:\n${lastLines(wish.logFile)}`);
   });
   return running(port, wish.superuserPassword, server.pid ?? 0, gone);
-}
-
-/** The process id in the lock file of a cluster's server; null when none is there. */
-export function lockHolder(
-  home: ClusterHome,
-): { readonly pid: number; readonly port: number } | null {
-  return readLock(join(home.folder, 'cluster'));
 }
 
 function running(port: number, password: string, pid: number, ended: Promise<void>): Cluster {
@@ -180,7 +173,9 @@ async function leftRunning(
   // It may still be starting, or ending: then the lock file goes away.
   const untilMs = performance.now() + stopTimeoutMs * 2;
   while (performance.now() < untilMs && readLock(folder)?.pid === lock.pid) {
-    if ((await check()) === 'ready') return lock;
+    const answer = await check();
+    if (answer === 'ready') return lock;
+    if (answer === 'refused') throw refusedPassword();
     await sleep(pollMs);
   }
   return null;
@@ -229,16 +224,18 @@ function isOneOf(error: unknown, codes: readonly string[]): boolean {
   return error instanceof Error && codes.includes(String(Reflect.get(error, 'code')));
 }
 
+function refusedPassword(): CannotStart {
+  return new CannotStart(
+    'The database does not take the password in secrets.json. Bring the right file back, or remove the data folder to begin anew.',
+  );
+}
+
 async function untilReady(check: () => Promise<Answer>, throwIfGone: () => void): Promise<void> {
   const untilMs = performance.now() + readyTimeoutMs;
   for (;;) {
     const answer = await check();
     if (answer === 'ready') return;
-    if (answer === 'refused') {
-      throw new CannotStart(
-        'The database does not take the password in secrets.json. Bring the right file back, or remove the data folder to begin anew.',
-      );
-    }
+    if (answer === 'refused') throw refusedPassword();
     throwIfGone();
     if (performance.now() > untilMs) throw new CannotStart('PostgreSQL does not answer.');
     await sleep(pollMs);

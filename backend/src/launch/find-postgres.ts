@@ -16,7 +16,7 @@ const debianFolder = '/usr/lib/postgresql';
 const createClusterSettings = '/etc/postgresql-common/createcluster.conf';
 
 /** The newest PostgreSQL on this computer that is new enough; null when there is none. */
-export function findPostgres(): PostgresPrograms | null {
+function findPostgres(): PostgresPrograms | null {
   const folders = [
     ...(existsSync(debianFolder)
       ? readdirSync(debianFolder).map((version) => join(debianFolder, version, 'bin'))

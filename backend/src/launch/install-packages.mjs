@@ -9,6 +9,15 @@ import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
+const oldestNode = [20, 19];
+const [major = 0, minor = 0] = process.versions.node.split('.').map(Number);
+if (major < oldestNode[0] || (major === oldestNode[0] && minor < oldestNode[1])) {
+  process.stderr.write(
+    `Ebbfolk needs Node ${oldestNode.join('.')} or newer, and this is ${process.versions.node}.\n`,
+  );
+  process.exit(1);
+}
+
 const projectRoot = join(dirname(fileURLToPath(import.meta.url)), '..', '..', '..');
 const stampFile = join(projectRoot, 'node_modules', '.ebbfolk-lock');
 const wanted = createHash('sha256')

@@ -6,7 +6,7 @@ import { runCommand } from './say.ts';
 const chromium = '/usr/bin/chromium';
 
 // What the tests need beside the packages: PostgreSQL, and a browser for the journeys.
-await runCommand(async () => {
+await runCommand(() => {
   findOrInstallPostgres();
   if (!existsSync(chromium)) installDebianPackages(['chromium'], 'Chromium');
 });

@@ -3,7 +3,7 @@ import type { Ports } from './ports.ts';
 import type { Secrets } from './secrets.ts';
 
 /** Which parts of the outside world a start makes itself, since the environment names none. */
-export interface OwnParts {
+interface OwnParts {
   readonly postgres: boolean;
   readonly signIn: boolean;
   readonly mail: boolean;

@@ -11,7 +11,7 @@ import type { Secrets } from './secrets.ts';
 const database = 'ebbfolk';
 
 /** One database, for its owner and for the application. */
-export interface OwnDatabase {
+interface OwnDatabase {
   readonly ownerUrl: string;
   readonly appUrl: string;
   /** Whether it was made just now. */

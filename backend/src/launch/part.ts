@@ -4,7 +4,7 @@ import { projectRoot } from './data-folder.ts';
 import type { Runs } from './launch.ts';
 import { CannotStart } from './say.ts';
 
-export interface PartWish {
+interface PartWish {
   /** As people call it: 'The mail catcher'. */
   readonly name: string;
   /** The TypeScript file to run, from the root of the project. */
@@ -17,14 +17,14 @@ export interface PartWish {
 }
 
 /** A program that was started as a child, and that ends by itself when this process is gone. */
-export interface Part extends Runs {
+interface Part extends Runs {
   /** Waits until the part says that it is ready; throws CannotStart when it ends before. */
   untilReady(): Promise<void>;
   /** Asks it to end; after the grace it is ended, with everything that it began. */
   stop(): Promise<void>;
 }
 
-const linesOfLog = 15;
+const linesOfLog = 25;
 
 /**
  * Starts a part under Node itself, never through npx, which would leave it behind. It has a
@@ -52,7 +52,7 @@ export function startPart(wish: PartWish): Part {
   });
   const ready = new Promise<void>((resolve) => {
     child.on('message', (message) => {
-      if (typeof message === 'object' && message !== null && 'ready' in message) resolve();
+      if (typeof message === 'object' && 'ready' in message) resolve();
     });
   });
   return {

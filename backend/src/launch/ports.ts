@@ -15,7 +15,7 @@ const placeInRow = {
   appBehindPage: 5,
 } as const;
 
-export type PortName = keyof typeof placeInRow;
+type PortName = keyof typeof placeInRow;
 
 const shape = z.partialRecord(
   z.enum(Object.keys(placeInRow) as [PortName, ...PortName[]]),
@@ -45,18 +45,19 @@ export interface Ports {
 /** The ports kept in a data folder; the first choices are `firstPort` and those after it. */
 export function keptPorts(folder: string, firstPort = firstPortWished()): Ports {
   const file = join(folder, 'ports.json');
-  const kept = readKept(file, shape) ?? {};
+  const kept = new Map(Object.entries(readKept(file, shape) ?? {}));
   const taken = new Set<number>();
+  const write = (): void => writeKept(file, Object.fromEntries(kept));
   const remember = (name: PortName, port: number): number => {
     taken.add(port);
-    if (kept[name] !== port) {
-      kept[name] = port;
-      writeKept(file, kept);
+    if (kept.get(name) !== port) {
+      kept.set(name, port);
+      write();
     }
     return port;
   };
   const nextFree = async (from: number): Promise<number> => {
-    const spoken = new Set([...taken, ...Object.values(kept)]);
+    const spoken = new Set([...taken, ...kept.values()]);
     for (let port = from; port <= highestPort; port += 1) {
       if (!spoken.has(port) && (await isFree(port))) return port;
     }
@@ -64,12 +65,12 @@ export function keptPorts(folder: string, firstPort = firstPortWished()): Ports 
   };
   return {
     async choose(name) {
-      const before = kept[name];
+      const before = kept.get(name);
       if (before !== undefined && (await becomesFree(before))) return remember(name, before);
       return remember(name, await nextFree(firstPort + placeInRow[name]));
     },
     async keep(name) {
-      const before = kept[name];
+      const before = kept.get(name);
       if (before === undefined) return remember(name, await nextFree(firstPort + placeInRow[name]));
       if (await becomesFree(before)) return remember(name, before);
       throw new CannotStart(
@@ -77,8 +78,8 @@ export function keptPorts(folder: string, firstPort = firstPortWished()): Ports 
       );
     },
     forget(name) {
-      delete kept[name];
-      writeKept(file, kept);
+      kept.delete(name);
+      write();
     },
   };
 }

@@ -5,8 +5,7 @@ const watcher = spawn(process.execPath, ['--watch', '--import', 'tsx', 'backend/
   stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
 });
 watcher.on('message', (message) => {
-  if (typeof message === 'object' && message !== null && 'ready' in message)
-    process.send?.(message);
+  if (typeof message === 'object' && 'ready' in message) process.send?.(message);
 });
 watcher.once('exit', (code) => process.exit(code ?? 0));
 const end = (): void => {

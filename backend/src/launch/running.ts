@@ -14,7 +14,7 @@ const shape = z.strictObject({
 });
 
 /** The start command that is at work on a data folder. */
-export type Running = z.output<typeof shape>;
+type Running = z.output<typeof shape>;
 
 /** This process's place as the only one at work on a data folder. */
 export interface Place {

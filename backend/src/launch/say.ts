@@ -12,7 +12,7 @@ export class CannotStart extends Error {
 }
 
 /** Runs a command of the launch folder: a sentence and exit code 1 when it cannot go on. */
-export async function runCommand(work: () => Promise<void>): Promise<void> {
+export async function runCommand(work: () => unknown): Promise<void> {
   try {
     await work();
   } catch (error) {

@@ -143,11 +143,17 @@ function columns(rows: readonly (readonly string[])[]): string[] {
   return rows.map(([first = '', second = '']) => `  ${first.padEnd(width)}  ${second}`);
 }
 
-/** Resolves when somebody tells this process to stop; telling it twice changes nothing. */
+/**
+ * Resolves when somebody tells this process to stop, or when the program that began it with a
+ * channel is gone; telling it twice changes nothing.
+ */
 function signalled(): Promise<null> {
   return new Promise((resolve) => {
     for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) {
       process.on(signal, () => resolve(null));
     }
+    process.once('disconnect', () => resolve(null));
+    // The channel alone must not keep this process.
+    process.channel?.unref();
   });
 }

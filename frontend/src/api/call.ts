@@ -3,11 +3,19 @@ import type * as account from '#shared/contracts/account.ts';
 import type { EndpointName } from '#shared/contracts/endpoints.ts';
 import { endpoints } from '#shared/contracts/endpoints.ts';
 import type { ProblemReply } from '#shared/contracts/problem.ts';
+import type * as seasonPlans from '#shared/contracts/season-plans.ts';
 import type * as sessions from '#shared/contracts/sessions.ts';
+import type * as shores from '#shared/contracts/shores.ts';
 import type * as slots from '#shared/contracts/slots.ts';
+import type * as tideTables from '#shared/contracts/tide-tables.ts';
 import { NoAnswerError, ProblemError } from './problem-error.ts';
 
-type Contracts = typeof account & typeof sessions & typeof slots;
+type Contracts = typeof account &
+  typeof seasonPlans &
+  typeof sessions &
+  typeof shores &
+  typeof slots &
+  typeof tideTables;
 
 /** What to send: the parts that the contract names, as they are written before parsing. */
 export interface Sent<Name extends EndpointName> {

@@ -28,7 +28,7 @@ export function FrontPage(props: {
         </Link>
         {props.children}
       </main>
-      <div className="mt-auto">{props.foot}</div>
+      {props.foot !== null && <footer className="mt-auto">{props.foot}</footer>}
     </div>
   );
 }

@@ -7,8 +7,15 @@ import { xOf, yOf } from './water-curve.ts';
 
 const STEP_M = 2;
 
+/** What the axes are drawn from: of a session's day, or of one without a session. */
+export type AxisFacts = Pick<
+  HeroFacts,
+  'axis' | 'zone' | 'dayFromAt' | 'sunriseAt' | 'sunsetAt'
+>;
+export type AxisLayout = Pick<HeroLayout, 'plot' | 'heightPx' | 'isNarrow'>;
+
 /** Behind the water: the night, the heights and the hours. */
-export function HeroAxes({ facts, layout }: { facts: HeroFacts; layout: HeroLayout }) {
+export function HeroAxes({ facts, layout }: { facts: AxisFacts; layout: AxisLayout }) {
   const { plot, isNarrow } = layout;
   const nightId = useId();
   const topPx = plot.topPx - 4;
@@ -67,14 +74,14 @@ export function HeroAxes({ facts, layout }: { facts: HeroFacts; layout: HeroLayo
   );
 }
 
-function heights(facts: HeroFacts): number[] {
+function heights(facts: AxisFacts): number[] {
   const first = Math.ceil(facts.axis.bottomM / STEP_M) * STEP_M;
   const count = Math.max(0, Math.floor((facts.axis.topM - first) / STEP_M) + 1);
   return Array.from({ length: count }, (_, step) => first + step * STEP_M);
 }
 
 /** The spans of the drawing without daylight, in pixels. */
-function nights(facts: HeroFacts, { plot }: HeroLayout): (readonly [number, number])[] {
+function nights(facts: AxisFacts, { plot }: AxisLayout): (readonly [number, number])[] {
   const { sunriseAt, sunsetAt } = facts;
   const spans: (readonly [Instant, Instant])[] = [];
   if (sunriseAt !== null) spans.push([plot.fromAt, Math.min(sunriseAt, plot.untilAt)]);
@@ -85,8 +92,8 @@ function nights(facts: HeroFacts, { plot }: HeroLayout): (readonly [number, numb
 }
 
 /** The full hours to be named: every third of a whole day, every second of a part of it. */
-function hours(facts: HeroFacts, { plot, isNarrow }: HeroLayout): Instant[] {
-  const day = dayAt(facts.startsAt, facts.zone);
+function hours(facts: AxisFacts, { plot, isNarrow }: AxisLayout): Instant[] {
+  const day = dayAt(facts.dayFromAt, facts.zone);
   const every = isNarrow ? 2 : 3;
   const clocks = Array.from({ length: 24 / every }, (_, step) => step * every);
   return clocks

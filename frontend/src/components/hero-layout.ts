@@ -1,7 +1,7 @@
 import type { Instant } from '#shared/kernel/time.ts';
 import { clockAt } from '#shared/kernel/time.ts';
 import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
-import type { Box, Label } from './label-box.ts';
+import type { Box, Label, LabelSize } from './label-box.ts';
 import { boxOf, labelWidthPx, meet } from './label-box.ts';
 import type { Plot, WaterAxis, WaterPoint } from './water-curve.ts';
 import { cutCurve, heightAt, xOf, yOf } from './water-curve.ts';
@@ -60,13 +60,18 @@ const NARROW_HOURS = 8;
 const RISE = 22;
 const GAP = 3;
 
+/** Whether a drawing of this width shows a part of the day only. */
+export function isNarrowHero(widthPx: number, scale: number): boolean {
+  return widthPx < NARROW_PX * scale;
+}
+
 /**
  * Places the words of the large water line in a drawing of this width. Each takes the first of
  * its places that lies inside the drawing and clear of the curve, the posts and the words placed
  * before it. `scale` is how much larger than usual text is set.
  */
 export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): HeroLayout {
-  const isNarrow = widthPx < NARROW_PX * scale;
+  const isNarrow = isNarrowHero(widthPx, scale);
   const leftPx = isNarrow ? 0 : 34 * scale;
   const words = wordsOf(facts);
   const [fromAt, untilAt] = isNarrow ? narrowSpan(facts, widthPx, scale) : wholeDay(facts);
@@ -223,8 +228,10 @@ function placeLowWater(
     const [x1, x2] = anchor === 'end' ? [x - spanPx, x] : [x, x + spanPx];
     return { x, anchor, y: highestY(plot, facts.curve, x1, x2) - 9 * scale };
   });
-  place('low-water', ...places.map((at) => ({ ...at, y: at.y - 18 * scale, size: 'low' })));
-  place('low-height', ...places.map((at) => ({ ...at, size: 'axis' })));
+  const sized = (size: LabelSize, raisedPx: number): Spot[] =>
+    places.map((at) => ({ ...at, y: at.y - raisedPx, size }));
+  place('low-water', ...sized('low', 18 * scale));
+  place('low-height', ...sized('axis', 0));
 }
 
 function placeSun(

@@ -3,8 +3,10 @@ import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
 import { listed, sentenceCase } from '#frontend/words/number-words.ts';
 import { HeroAxes } from './hero-axes.tsx';
 import type { HeroFacts, HeroLabel, HeroLabelKey, HeroLayout } from './hero-layout.ts';
-import { layoutHero } from './hero-layout.ts';
+import { isNarrowHero, layoutHero } from './hero-layout.ts';
 import type { LabelSize } from './label-box.ts';
+import type { WaterLevel } from './level-lines.tsx';
+import { LevelLines, levelsWidthPx } from './level-lines.tsx';
 import { textScale } from './root-font.ts';
 import { useMeasuredWidth } from './use-measured-width.ts';
 import { heightAt, linePath, sandPath, waterPath, xOf, yOf } from './water-curve.ts';
@@ -21,14 +23,30 @@ const textLooks: Record<LabelSize, string> = {
  * The large water line of a session's day: when the lower shore is clear and when everyone is off
  * the shore, on the water that makes it so. Redrawn at the width it has; text is never scaled.
  */
-export function TideHero({ facts, shoreName }: { facts: HeroFacts; shoreName: string }) {
+export function TideHero(props: {
+  readonly facts: HeroFacts;
+  readonly shoreName: string;
+  /** Heights to be shown over the water; they lie within the axis. */
+  readonly levels?: readonly WaterLevel[];
+}) {
+  const { facts, shoreName, levels = [] } = props;
   const [ref, widthPx] = useMeasuredWidth<HTMLElement>();
-  const layout = widthPx === null || widthPx <= 0 ? null : layoutHero(facts, widthPx, textScale());
+  const scale = textScale();
+  const rightPx =
+    widthPx === null ? 0 : levelsWidthPx(levels, isNarrowHero(widthPx, scale), scale);
+  const layout =
+    widthPx === null || widthPx <= rightPx ? null : layoutHero(facts, widthPx - rightPx, scale);
   return (
     <figure ref={ref} className="min-h-56">
       {layout !== null && (
         <>
-          <HeroDrawing facts={facts} layout={layout} label={spoken(facts, shoreName)} />
+          <HeroDrawing
+            facts={facts}
+            layout={layout}
+            levels={levels}
+            rightPx={rightPx}
+            label={spoken(facts, shoreName)}
+          />
           <UnplacedTimes facts={facts} keys={layout.unplaced} />
         </>
       )}
@@ -39,10 +57,14 @@ export function TideHero({ facts, shoreName }: { facts: HeroFacts; shoreName: st
 function HeroDrawing({
   facts,
   layout,
+  levels,
+  rightPx,
   label,
 }: {
   readonly facts: HeroFacts;
   readonly layout: HeroLayout;
+  readonly levels: readonly WaterLevel[];
+  readonly rightPx: number;
   readonly label: string;
 }) {
   const { plot, leftPx, heightPx } = layout;
@@ -50,7 +72,7 @@ function HeroDrawing({
   const ceilingPx = plot.topPx - 4;
   const floorPx = plot.basePx + 4;
   const sand = sandPath(plot, curve, facts.startsAt, facts.offByAt, ceilingPx);
-  const widthPx = plot.widthPx + leftPx;
+  const widthPx = plot.widthPx + leftPx + rightPx;
   return (
     <svg
       className="block max-w-none"
@@ -80,6 +102,7 @@ function HeroDrawing({
         strokeLinejoin="round"
         d={linePath(plot, curve)}
       />
+      <LevelLines plot={plot} levels={levels} isNarrow={layout.isNarrow} scale={textScale()} />
       {facts.isStoodDown ? (
         <FallenPost facts={facts} layout={layout} />
       ) : (

@@ -7,7 +7,7 @@ import { Who } from '#frontend/features/account/who.tsx';
 import { useWideScreen } from '#frontend/components/use-wide-screen.ts';
 
 /** The frame of every page that needs somebody signed in; its loader has seen to that. */
-export function Component() {
+export function SignedIn() {
   const { data: account } = useSuspenseQuery(accountQueries.account());
   const { pathname } = useLocation();
   const isWide = useWideScreen();

@@ -16,3 +16,17 @@ export function metres(heightM: number): string {
 export function clockOfWater(at: Instant, zone: string): string {
   return clockAt(Math.round(at / MINUTE_MS) * MINUTE_MS, zone);
 }
+
+/** Where heights come from: 'predicted from Outer Skerrow', 'from the official table Skerrow 2027'. */
+export function sourceInWords(source: {
+  readonly stationName: string;
+  readonly table: string | null;
+}): string {
+  return source.table === null
+    ? `predicted from ${source.stationName}`
+    : `from the official table ${source.table}`;
+}
+
+/** What stands wherever heights and times of the water are shown. */
+export const tideCaution =
+  'Predictions are predictions: pressure, wind and swell move the water. The official tide table and the shore leader on the spot decide.';

@@ -19,6 +19,8 @@ export interface Contract<
   readonly query: Query;
   readonly body: Body;
   readonly reply: Reply;
+  /** The longest body in bytes, where it is more than the 200 kB that every route takes. */
+  readonly longestBodyBytes?: number;
 }
 
 /** A contract that answers with JSON; keeps the exact types of its parts. */

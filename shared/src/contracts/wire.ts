@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import type { CalendarDay } from '../kernel/time.ts';
-import { isCalendarDay } from '../kernel/time.ts';
+import type { CalendarDay, ClockTime } from '../kernel/time.ts';
+import { isCalendarDay, isClockTime } from '../kernel/time.ts';
 
 /** Nothing in this place of a request. */
 export const nothing = z.strictObject({});
@@ -34,7 +34,28 @@ export const tideSource = z.strictObject({
   longitude: z.number(),
   datum: z.string().describe('What heights are measured from, for example LAT or MLLW'),
   attribution: z.string(),
+  table: z
+    .string()
+    .nullable()
+    .describe('What an official table in force for the shown days is called; null: predicted'),
 });
 
 /** The vertical axis of a shore's drawings: lowest astronomical tide less 0.3 m, to the highest. */
 export const waterAxis = z.strictObject({ bottomM: heightM, topM: heightM });
+
+/** A time on the clock, HH:MM. */
+export const clockTime = z
+  .custom<ClockTime>((value) => typeof value === 'string' && isClockTime(value), {
+    error: 'Write a time like 07:30',
+  })
+  .meta({ type: 'string', description: 'A time on the clock, HH:MM' });
+
+/** Whole minutes from 0 to a largest number. */
+export function minutes(most: number) {
+  return z.number().int().min(0).max(most);
+}
+
+/** Text that says something, at most so many characters, without space at its ends. */
+export function someText(most: number) {
+  return z.string().trim().min(1, { error: 'Write something here' }).max(most);
+}

@@ -10,4 +10,6 @@ export type SlotKindId = Id<'slot-kind'>;
 export type CompetencyId = Id<'competency'>;
 export type AwardId = Id<'award'>;
 export type ClaimId = Id<'claim'>;
+export type SeasonPlanId = Id<'season-plan'>;
+export type TideTableId = Id<'tide-table'>;
 export type LetterId = Id<'letter'>;

@@ -25,6 +25,12 @@ export const policy = {
   'calendar.see': anyPerson,
   'session.see': anyPerson,
   'session.see-drafts': holds('coordinator'),
+  'shore.see': anyPerson,
+  'shore.change': holds('coordinator', 'administrator'),
+  'tide-table.see': holds('coordinator', 'administrator'),
+  'tide-table.change': holds('coordinator', 'administrator'),
+  'season-plan.see': holds('coordinator'),
+  'season-plan.change': holds('coordinator'),
   'slot.claim': anyPerson,
   'slot.release-own': anyPerson,
 } as const;

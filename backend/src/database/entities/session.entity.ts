@@ -1,5 +1,6 @@
 import { EntitySchema } from 'typeorm';
-import type { SessionId, ShoreId, SlotId, SlotKindId } from '#shared/kernel/ids.ts';
+import type { CalendarDay } from '#shared/kernel/time.ts';
+import type { SeasonPlanId, SessionId, ShoreId, SlotId, SlotKindId } from '#shared/kernel/ids.ts';
 
 /** One session: on a shore at a low water, or for training at a clock time. */
 export interface SessionRow {
@@ -18,6 +19,9 @@ export interface SessionRow {
   lowerShoreClearBy: Date | null;
   offTheShoreBy: Date | null;
   madeAt: Date;
+  /** The plan and the date of it from which the session was made; null: made by itself. */
+  seasonPlanId: SeasonPlanId | null;
+  plannedOn: CalendarDay | null;
 }
 
 /** A place in the crew of a session. */
@@ -46,6 +50,8 @@ export const SessionEntity = new EntitySchema<SessionRow>({
     lowerShoreClearBy: { name: 'lower_shore_clear_by', type: 'timestamptz', nullable: true },
     offTheShoreBy: { name: 'off_the_shore_by', type: 'timestamptz', nullable: true },
     madeAt: { name: 'made_at', type: 'timestamptz' },
+    seasonPlanId: { name: 'season_plan_id', type: 'uuid', nullable: true },
+    plannedOn: { name: 'planned_on', type: 'date', nullable: true },
   },
 });
 

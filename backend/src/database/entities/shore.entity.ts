@@ -12,6 +12,10 @@ export interface ShoreRow {
   latitude: number;
   longitude: number;
   tideStationId: string;
+  highLaterMinutes: number;
+  highHigherM: number;
+  lowLaterMinutes: number;
+  lowHigherM: number;
   lowestTideM: number;
   highestTideM: number;
   workingLevelM: number;
@@ -25,6 +29,11 @@ export interface ShoreRow {
   crewMeetsMinutes: number;
   partyMeetsMinutes: number;
   meetingPlace: string;
+  hazards: string;
+  waysOff: string;
+  phoneSignal: string;
+  emergencyWords: string;
+  ratioPreset: 'schools' | 'families' | 'strict';
 }
 
 export const ShoreEntity = new EntitySchema<ShoreRow>({
@@ -37,6 +46,10 @@ export const ShoreEntity = new EntitySchema<ShoreRow>({
     latitude: { type: 'double precision' },
     longitude: { type: 'double precision' },
     tideStationId: { name: 'tide_station_id', type: 'text' },
+    highLaterMinutes: { name: 'high_later_minutes', type: 'integer', default: 0 },
+    highHigherM: { name: 'high_higher_m', type: 'double precision', default: 0 },
+    lowLaterMinutes: { name: 'low_later_minutes', type: 'integer', default: 0 },
+    lowHigherM: { name: 'low_higher_m', type: 'double precision', default: 0 },
     lowestTideM: { name: 'lowest_tide_m', type: 'double precision' },
     highestTideM: { name: 'highest_tide_m', type: 'double precision' },
     workingLevelM: { name: 'working_level_m', type: 'double precision' },
@@ -50,5 +63,10 @@ export const ShoreEntity = new EntitySchema<ShoreRow>({
     crewMeetsMinutes: { name: 'crew_meets_minutes', type: 'integer' },
     partyMeetsMinutes: { name: 'party_meets_minutes', type: 'integer' },
     meetingPlace: { name: 'meeting_place', type: 'text' },
+    hazards: { type: 'text', default: '' },
+    waysOff: { name: 'ways_off', type: 'text', default: '' },
+    phoneSignal: { name: 'phone_signal', type: 'text', default: '' },
+    emergencyWords: { name: 'emergency_words', type: 'text', default: '' },
+    ratioPreset: { name: 'ratio_preset', type: 'text', default: 'families' },
   },
 });

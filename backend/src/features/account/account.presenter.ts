@@ -78,7 +78,8 @@ function presentNext(next: FrontDoorSeen['next']): FrontDoorView['nextSession'] 
 
 function presentFortnight(fortnight: FrontDoorSeen['fortnight']): FrontDoorView['fortnight'] {
   if (fortnight === null) return null;
-  const { shore, station, curve, sessions, marks } = fortnight;
+  const { shore, tide, curve, sessions, marks } = fortnight;
+  const [fromAt, toAt] = [curve[0]?.at ?? 0, curve.at(-1)?.at ?? 0];
   const ofKind = (kind: 'springs' | 'neaps') =>
     marks
       .filter((mark) => mark.kind === kind)
@@ -86,7 +87,7 @@ function presentFortnight(fortnight: FrontDoorSeen['fortnight']): FrontDoorView[
   return {
     zone: shore.zone,
     axis: presentAxis(shore),
-    source: presentSource(station),
+    source: presentSource(tide, fromAt, toAt),
     curve: presentCurve(curve),
     sessions: sessions.flatMap(({ startsAt, lowWaterAt, offTheShoreBy }) =>
       lowWaterAt === null || offTheShoreBy === null

@@ -1,6 +1,7 @@
 import type { AppContext } from '#backend/app-context.ts';
 import { readShores } from '#backend/features/shores/shores.reader.ts';
 import type { Shore } from '#backend/features/shores/shores.reader.ts';
+import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { lowNearestNoon } from '#shared/domain/tides/shore-water.ts';
 import type { TideExtreme, TideHeight } from '#shared/domain/tides/tide-curve.ts';
 import type { Instant } from '#shared/kernel/time.ts';
@@ -22,7 +23,8 @@ export async function seeAccount(
   const now = ctx.clock.now();
   const shores = await ctx.reading(readShores);
   const shore = shores[0];
-  const tide = shore === undefined ? null : await ctx.tides.at(shore.tideStationId);
+  const tide =
+    shore === undefined ? null : await ctx.reading((read) => readShoreTide(ctx.tides, read, shore));
   if (shore === undefined || tide === null) return { now, today: null };
   const on = dayAt(now, shore.zone);
   return {

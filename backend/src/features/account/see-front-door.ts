@@ -6,7 +6,8 @@ import {
 import type { Session } from '#backend/features/sessions/sessions.reader.ts';
 import { readShores } from '#backend/features/shores/shores.reader.ts';
 import type { Shore } from '#backend/features/shores/shores.reader.ts';
-import type { StationFacts } from '#backend/platform/tides/tide-stations.ts';
+import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
+import type { ShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { extremesOn, tideMarks } from '#shared/domain/tides/shore-water.ts';
 import type { TideMark } from '#shared/domain/tides/shore-water.ts';
 import type { TideHeight } from '#shared/domain/tides/tide-curve.ts';
@@ -27,7 +28,7 @@ export interface FrontDoorSeen {
   } | null;
   readonly fortnight: {
     readonly shore: Shore;
-    readonly station: StationFacts;
+    readonly tide: ShoreTide;
     readonly curve: readonly TideHeight[];
     readonly sessions: readonly Session[];
     readonly marks: readonly (TideMark & { readonly at: Instant })[];
@@ -55,7 +56,8 @@ async function nextSession(
   session: Session,
 ): Promise<FrontDoorSeen['next']> {
   const shore = shores.find(({ id }) => id === session.shoreId);
-  const tide = shore === undefined ? null : await ctx.tides.at(shore.tideStationId);
+  const tide =
+    shore === undefined ? null : await ctx.reading((read) => readShoreTide(ctx.tides, read, shore));
   if (shore === undefined || tide === null) return null;
   const fromAt = startOfDay(session.firstDayOn, session.zone);
   const toAt = startOfDay(addDays(session.firstDayOn, 1), session.zone);
@@ -67,7 +69,7 @@ async function fortnight(
   shore: Shore,
   now: Instant,
 ): Promise<FrontDoorSeen['fortnight']> {
-  const tide = await ctx.tides.at(shore.tideStationId);
+  const tide = await ctx.reading((read) => readShoreTide(ctx.tides, read, shore));
   if (tide === null) return null;
   const fromOn = dayAt(now, shore.zone);
   const toOn = addDays(fromOn, fortnightDays - 1);
@@ -77,7 +79,7 @@ async function fortnight(
     startOfDay(mark.on, shore.zone);
   return {
     shore,
-    station: tide.station,
+    tide,
     curve: tide.curve.series(
       startOfDay(fromOn, shore.zone),
       startOfDay(addDays(toOn, 1), shore.zone),

@@ -5,7 +5,8 @@ import { readCrewFacts, readSlotsOfSessions } from '#backend/features/slots/slot
 import type { CrewFacts, SlotFacts } from '#backend/features/slots/slots.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
 import type { Actor } from '#backend/http/route.ts';
-import type { StationFacts } from '#backend/platform/tides/tide-stations.ts';
+import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
+import type { ShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { daylightLow, tideMarks, windowOn } from '#shared/domain/tides/shore-water.ts';
 import type { TideMark } from '#shared/domain/tides/shore-water.ts';
 import type { TideExtreme, TideHeight } from '#shared/domain/tides/tide-curve.ts';
@@ -34,7 +35,7 @@ export interface CalendarSeen {
   readonly todayOn: CalendarDay;
   readonly shores: readonly Shore[];
   readonly homeWater: {
-    readonly station: StationFacts;
+    readonly tide: ShoreTide;
     readonly curve: readonly TideHeight[];
     readonly days: readonly ShoreDay[];
     readonly marks: readonly TideMark[];
@@ -46,7 +47,7 @@ export interface CalendarSeen {
 
 /**
  * The sessions and the home shore's water from one local day to another, both included. At
- * most 62 days. Four statements, however many sessions there are.
+ * most 62 days. Five statements, however many sessions there are.
  */
 export async function seeCalendar(
   ctx: AppContext,
@@ -103,9 +104,9 @@ async function homeWater(
   fromOn: CalendarDay,
   toOn: CalendarDay,
 ): Promise<CalendarSeen['homeWater']> {
-  const tide = await ctx.tides.at(home.tideStationId);
+  const tide = await ctx.reading((read) => readShoreTide(ctx.tides, read, home));
   if (tide === null) return null;
-  const { station, curve } = tide;
+  const { curve } = tide;
   const days: ShoreDay[] = [];
   for (let on = fromOn; on <= toOn; on = addDays(on, 1)) {
     const window = windowOn(home, curve, on);
@@ -116,7 +117,7 @@ async function homeWater(
     });
   }
   return {
-    station,
+    tide,
     curve: curve.series(
       startOfDay(fromOn, home.zone),
       startOfDay(addDays(toOn, 1), home.zone),

@@ -7,7 +7,8 @@ import { readTrailOfSession } from '#backend/features/trail/trail.reader.ts';
 import type { SessionTrailEntry } from '#backend/features/trail/trail.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
 import type { Actor } from '#backend/http/route.ts';
-import type { StationFacts } from '#backend/platform/tides/tide-stations.ts';
+import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
+import type { ShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { extremesOn } from '#shared/domain/tides/shore-water.ts';
 import type { TideExtreme, TideHeight } from '#shared/domain/tides/tide-curve.ts';
 import type { SessionId } from '#shared/kernel/ids.ts';
@@ -23,7 +24,7 @@ const curveStepMinutes = 6;
 
 /** The water of one local day at a shore. */
 export interface WaterOfDay {
-  readonly station: StationFacts;
+  readonly tide: ShoreTide;
   readonly curve: readonly TideHeight[];
   readonly extremes: readonly TideExtreme[];
   readonly sun: SunDay;
@@ -75,11 +76,11 @@ async function waterOfDay(
   shore: Shore,
   session: Session,
 ): Promise<WaterOfDay | null> {
-  const tide = await ctx.tides.at(shore.tideStationId);
+  const tide = await ctx.reading((read) => readShoreTide(ctx.tides, read, shore));
   if (tide === null) return null;
   const on = session.firstDayOn;
   return {
-    station: tide.station,
+    tide,
     curve: tide.curve.series(
       startOfDay(on, shore.zone),
       startOfDay(addDays(on, 1), shore.zone),

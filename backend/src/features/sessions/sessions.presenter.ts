@@ -49,7 +49,7 @@ export function presentSession(seen: SessionSeen): SessionView {
             extremes: water.extremes.map(presentExtreme),
             sunriseAt: orNull(water.sun.sunriseAt),
             sunsetAt: orNull(water.sun.sunsetAt),
-            source: presentSource(water.station),
+            source: presentSource(water.tide, session.crewMeetsAt, session.endsAt),
           },
     slots: slots.map((slot) => presentSlot(slot, crew, now)),
     trail: presentTrail(seen.trail),
@@ -131,7 +131,11 @@ function presentHomeShore(seen: CalendarSeen): CalendarView['homeShore'] {
     id: home.id,
     name: home.name,
     axis: presentAxis(home),
-    source: presentSource(water.station),
+    source: presentSource(
+      water.tide,
+      water.curve[0]?.at ?? seen.now,
+      water.curve.at(-1)?.at ?? seen.now,
+    ),
     curve: presentCurve(water.curve),
     days: water.days.map((day) => ({
       on: day.on,

@@ -5,7 +5,7 @@ import type { LimpetLook } from '#frontend/components/limpet.tsx';
 import { useMeasuredWidth } from '#frontend/components/use-measured-width.ts';
 import { readCurve } from '#frontend/components/water-curve.ts';
 import { WaterLine } from '#frontend/components/water-line.tsx';
-import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
+import { clockOfWater, metres, sourceInWords } from '#frontend/words/tide-words.ts';
 import { sentenceCase } from '#frontend/words/number-words.ts';
 import type { CalendarSession, CalendarView } from '#shared/contracts/sessions.ts';
 import { addDays, clockAt, formatDay, fromIso, startOfDay, zoneName } from '#shared/kernel/time.ts';
@@ -196,7 +196,7 @@ export function TideCaution({ view }: { view: CalendarView }) {
   const { name, source } = view.homeShore;
   return (
     <p className="mt-2">
-      {`The water at ${name}, predicted from ${source.stationName}, heights above ${source.datum}. ${source.attribution} The official tide table and the shore leader on the spot decide.`}
+      {`The water at ${name}, ${sourceInWords(source)}, heights above ${source.datum}. ${source.attribution} The official tide table and the shore leader on the spot decide.`}
     </p>
   );
 }

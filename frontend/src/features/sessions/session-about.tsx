@@ -1,4 +1,6 @@
 import { sentenceCase } from '#frontend/words/number-words.ts';
+import { positionInWords } from '#frontend/words/position-words.ts';
+import { sourceInWords, tideCaution } from '#frontend/words/tide-words.ts';
 import { shortDate } from '#frontend/words/day-words.ts';
 import type { SessionView } from '#shared/contracts/sessions.ts';
 import { clockAt, dayAt, fromIso, zoneName } from '#shared/kernel/time.ts';
@@ -60,25 +62,18 @@ function TimeToKeep(props: {
 function Caution({ session }: { session: SessionView }) {
   if (session.water === null) return null;
   const { source } = session.water;
-  const at = `${degrees(source.latitude, 'N', 'S')}, ${degrees(source.longitude, 'E', 'W')}`;
+  const at = positionInWords(source);
   return (
     <section aria-labelledby="predictions" className="mt-5.5 text-sm">
       <h2 id="predictions" className="mb-1.5">
         About the tides
       </h2>
-      <p>
-        Predictions are predictions: pressure, wind and swell move the water. The official tide
-        table and the shore leader on the spot decide.
-      </p>
+      <p>{tideCaution}</p>
       <p className="mt-1 text-barnacle">
-        {`Tide station ${source.stationName}, ${at}. Heights in metres above ${source.datum}. ${source.attribution}`}
+        {`Tide station ${source.stationName}, ${at}${source.table === null ? '' : `, ${sourceInWords(source)}`}. Heights in metres above ${source.datum}. ${source.attribution}`}
       </p>
     </section>
   );
-}
-
-function degrees(value: number, positive: string, negative: string): string {
-  return `${Math.abs(value).toFixed(2)}° ${value < 0 ? negative : positive}`;
 }
 
 /** What happened to a session, newest first, in words. */

@@ -51,6 +51,21 @@ export function windowOn(
   });
 }
 
+/** The days with a working window among so many from the first one on. */
+export function usableDaysFrom(
+  shore: ShoreRules,
+  curve: TideCurve,
+  fromOn: CalendarDay,
+  days: number,
+): CalendarDay[] {
+  const usable: CalendarDay[] = [];
+  for (let ahead = 0; ahead < days; ahead += 1) {
+    const on = addDays(fromOn, ahead);
+    if (windowOn(shore, curve, on).isGranted) usable.push(on);
+  }
+  return usable;
+}
+
 /** The high and low waters of a local day. */
 export function extremesOn(curve: TideCurve, on: CalendarDay, zone: string): TideExtreme[] {
   return curve.extremes(startOfDay(on, zone), startOfDay(addDays(on, 1), zone));
