@@ -56,7 +56,7 @@ export async function startApp(settings: Settings, outside: Outside): Promise<Ap
   const ctx: AppContext = {
     ...transactionsOf(dataSource),
     clock,
-    tides: tidesOf(tideStations()),
+    tides: tidesOf(tideStations(), clock),
     mailer,
     group: { ...settings.group, baseUrl: settings.baseUrl },
     newId: <Id extends string>() => randomUUID() as string as Id,

@@ -91,7 +91,11 @@ function written(events: readonly TableEvent[], layout: Layout): string {
     const cells = Array.from({ length: layout.eventsARow }, () => each).flat();
     lines.push(['Date', ...cells].join(layout.separator));
   }
-  const days = Map.groupBy(events, ({ at }) => wall(at, layout.zone).on);
+  const days = new Map<CalendarDay, TableEvent[]>();
+  for (const event of events) {
+    const { on } = wall(event.at, layout.zone);
+    days.set(on, [...(days.get(on) ?? []), event]);
+  }
   for (const [on, ofDay] of days) {
     for (let from = 0; from < ofDay.length; from += layout.eventsARow) {
       const cells = ofDay

@@ -26,6 +26,8 @@ describe('a text that is no table', () => {
     ['a picture', '\ufffdPNG\u001a\u0000\u0000', 'not-text'],
     ['a heading alone', 'Date,Time,Height (m)\n', 'header-only'],
     ['a letter', 'Dear all,\nthe table follows on 3 May.\n', 'not-a-table'],
+    ['more lines than any year has', '2027-01-01 00:31 1.2\n'.repeat(10_001), 'too-large'],
+    ['a line without an end', `2027-01-01${' 00:31 1.2'.repeat(100_000)}`, 'not-a-table'],
     ['too much', '1'.repeat(OFFICIAL_TABLE_LIMIT_BYTES + 1), 'too-large'],
   ])('is refused as a whole: %s', (_, text, why) => {
     expect(whyRefused(text, { zone: LONDON })).toBe(why);
@@ -181,6 +183,12 @@ describe('a bad line', () => {
     ]);
   });
 
+  it('with a slip in its year is left out, even where no line follows it', () => {
+    const table = read([...lines, '2207-09-30,23:10,1.20,L'].join('\n'));
+    expect(table.events).toHaveLength(400);
+    expect(table.problems).toEqual([expect.objectContaining({ row: 401, why: 'out-of-order' })]);
+  });
+
   it('less than two hours after another is doubtful', () => {
     const text = [
       '2027-05-01 00:31 1.0 L',
@@ -242,6 +250,40 @@ describe('clock changes in a table', () => {
       '2027-03-28T06:40:00.000Z',
       '2027-10-31T00:30:00.000Z',
     ]);
+  });
+});
+
+describe('a table as people keep it', () => {
+  const expected = ['2027-05-12T23:31 low 1.2', '2027-05-13T05:40 high 5.6'];
+
+  it.each([
+    [
+      'a running number',
+      'No.,Date,Time,Height (m)\n1,2027-05-13,00:31,1.2\n2,2027-05-13,06:40,5.6',
+    ],
+    ['a coefficient', 'Date,Time,m,Coef\n2027-05-13,00:31,1.2,\n2027-05-13,06:40,5.6,95'],
+    [
+      'words at the foot',
+      'Date,Time,m\n2027-05-13,00:31,1.2\n2027-05-13,06:40,5.6\nAn invented shore.',
+    ],
+    ['quoted cells', '"Date","Time","m"\n"13/05/2027","00:31","1,20"\n"13/05/2027","06:40","5,60"'],
+    ['date and time in one cell', '2027-05-13T00:31,1.20\n2027-05-13T06:40,5.6'],
+    ['the date on its first line alone', 'Date;Time;m\nThu 13 May 2027;0031;1.2\n;0640;5.6'],
+    ['points in its times', '13.05.2027 00.31 1.20 06.40 5.60'],
+    ['its units behind its figures', '13 May 2027 12:31 am 1.2m 6:40 a.m. 5.6m'],
+  ])('is read with %s', (_, text) => {
+    const table = read(text);
+    expect(table.problems).toEqual([]);
+    expect(
+      table.events.map(({ at, kind, heightM }) => `${toIso(at).slice(0, 16)} ${kind} ${heightM}`),
+    ).toEqual(expected);
+  });
+
+  it('lists a line of other things below its rows', () => {
+    const text = 'Date,Time,m\n2027-05-13,00:31,1.2\n2027-05-13,06:40,5.6\nPrinted in 2026';
+    const table = read(text);
+    expect(table.events).toHaveLength(2);
+    expect(table.problems).toEqual([expect.objectContaining({ row: 4, why: 'missing' })]);
   });
 });
 

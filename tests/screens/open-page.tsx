@@ -13,6 +13,8 @@ import type { ProblemCode, ProblemReply } from '#shared/contracts/problem.ts';
 export interface Asked {
   readonly endpoint: EndpointName;
   readonly url: URL;
+  /** What was sent as JSON; undefined where nothing was. */
+  readonly body: unknown;
 }
 
 export type Answers = Partial<Record<EndpointName, (asked: Asked) => unknown>>;
@@ -21,7 +23,12 @@ export type Answers = Partial<Record<EndpointName, (asked: Asked) => unknown>>;
 export class Refuses extends Error {
   readonly problem: ProblemReply;
 
-  constructor(code: ProblemCode, title: string, reasons?: ProblemReply['reasons']) {
+  constructor(
+    code: ProblemCode,
+    title: string,
+    reasons?: ProblemReply['reasons'],
+    fields?: ProblemReply['fields'],
+  ) {
     super(title);
     this.problem = problem.parse({
       type: `about:blank#${code}`,
@@ -29,6 +36,7 @@ export class Refuses extends Error {
       status: problemStatus[code],
       code,
       ...(reasons === undefined ? {} : { reasons }),
+      ...(fields === undefined ? {} : { fields }),
     });
   }
 }
@@ -70,7 +78,8 @@ function askedOf(input: string, init: RequestInit): Asked {
     return endpoints[name].method === method && pattern.test(url.pathname);
   });
   if (found === undefined) throw new TypeError(`No endpoint ${method} ${url.pathname}`);
-  return { endpoint: found, url };
+  const body: unknown = typeof init.body === 'string' ? JSON.parse(init.body) : undefined;
+  return { endpoint: found, url, body };
 }
 
 function respond(status: number, type: string, body: unknown): Response {

@@ -4,6 +4,7 @@ import { PersonRoleEntity } from '#backend/database/entities/person-role.entity.
 import { PersonEntity } from '#backend/database/entities/person.entity.ts';
 import { SessionEntity, SlotEntity } from '#backend/database/entities/session.entity.ts';
 import { ShoreEntity } from '#backend/database/entities/shore.entity.ts';
+import type { ShoreRow } from '#backend/database/entities/shore.entity.ts';
 import {
   SlotKindEntity,
   SlotKindRequirementEntity,
@@ -122,7 +123,7 @@ export function given(ctx: AppContext) {
       return id;
     },
 
-    async shore(name = `Shore ${next()}`): Promise<ShoreId> {
+    async shore(name = `Shore ${next()}`, more: Partial<ShoreRow> = {}): Promise<ShoreId> {
       const id = ctx.newId<ShoreId>();
       await write('shore', id, (tx) =>
         tx.insert(ShoreEntity, {
@@ -146,6 +147,7 @@ export function given(ctx: AppContext) {
           crewMeetsMinutes: 45,
           partyMeetsMinutes: 20,
           meetingPlace: 'At the gate',
+          ...more,
         }),
       );
       return id;

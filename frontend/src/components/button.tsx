@@ -21,6 +21,8 @@ interface ButtonProps {
   readonly isWideOnPhone?: boolean;
   /** Work is under way: it stays where it is, keeps the focus, and does nothing more. */
   readonly isBusy?: boolean;
+  /** The id of the words on the page that say why it cannot be pressed now; it keeps the focus. */
+  readonly whyNotId?: string | undefined;
   readonly onPress?: () => void;
   readonly ref?: Ref<HTMLButtonElement>;
   readonly children: ReactNode;
@@ -29,13 +31,15 @@ interface ButtonProps {
 /** A button that does something here. What goes elsewhere is a link. */
 export function Button(props: ButtonProps) {
   const { look = 'solid', isWideOnPhone = false, isBusy = false, onPress, ref, children } = props;
+  const isResting = isBusy || props.whyNotId !== undefined;
   return (
     <button
       ref={ref}
       type="button"
-      className={`${isBusy && look !== 'plain' ? busyLook : looks[look]}${isWideOnPhone ? ' max-wide:w-full' : ''}`}
-      aria-disabled={isBusy || undefined}
-      onClick={isBusy ? undefined : onPress}
+      className={`${isResting && look !== 'plain' ? busyLook : looks[look]}${isWideOnPhone ? ' max-wide:w-full' : ''}`}
+      aria-disabled={isResting || undefined}
+      aria-describedby={props.whyNotId}
+      onClick={isResting ? undefined : onPress}
     >
       {children}
     </button>

@@ -15,8 +15,8 @@ export interface FieldProps {
   readonly isReadOnly?: boolean;
 }
 
-const box =
-  'w-full rounded-md bg-paper px-3 py-1 text-ui text-ink read-only:bg-wash read-only:text-barnacle max-wide:text-md';
+const box = 'w-full rounded-md bg-paper px-3 py-1 text-ui text-ink max-wide:text-md';
+const fixed = 'read-only:bg-wash read-only:text-barnacle';
 const oneLine = `${box} min-h-9 max-wide:min-h-target`;
 
 /** The frame of a control: wrong ones are told by colour, weight, words and to speech. */
@@ -69,7 +69,7 @@ function LineField(
         <span className="relative block">
           <input
             {...aria}
-            className={`${oneLine} tabular-nums ${frame(props.error)} ${unit === undefined ? '' : 'pr-8'}`}
+            className={`${oneLine} ${fixed} tabular-nums ${frame(props.error)} ${unit === undefined ? '' : 'pr-8'}`}
             type={props.type}
             inputMode={keys}
             autoComplete="off"
@@ -101,7 +101,7 @@ export function TextArea(props: FieldProps & { readonly rows?: number }) {
       {(aria) => (
         <textarea
           {...aria}
-          className={`${box} block ${frame(props.error)}`}
+          className={`${box} ${fixed} block ${frame(props.error)}`}
           rows={props.rows ?? 3}
           value={props.value}
           readOnly={props.isReadOnly}

@@ -8,10 +8,7 @@ import { xOf, yOf } from './water-curve.ts';
 const STEP_M = 2;
 
 /** What the axes are drawn from: of a session's day, or of one without a session. */
-export type AxisFacts = Pick<
-  HeroFacts,
-  'axis' | 'zone' | 'dayFromAt' | 'sunriseAt' | 'sunsetAt'
->;
+export type AxisFacts = Pick<HeroFacts, 'axis' | 'zone' | 'dayFromAt' | 'sunriseAt' | 'sunsetAt'>;
 export type AxisLayout = Pick<HeroLayout, 'plot' | 'heightPx' | 'isNarrow'>;
 
 /** Behind the water: the night, the heights and the hours. */

@@ -68,9 +68,15 @@ export function isNarrowHero(widthPx: number, scale: number): boolean {
 /**
  * Places the words of the large water line in a drawing of this width. Each takes the first of
  * its places that lies inside the drawing and clear of the curve, the posts and the words placed
- * before it. `scale` is how much larger than usual text is set.
+ * before it. `scale` is how much larger than usual text is set; `levelsM` are heights at which lines
+ * cross the drawing.
  */
-export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): HeroLayout {
+export function layoutHero(
+  facts: HeroFacts,
+  widthPx: number,
+  scale: number,
+  levelsM: readonly number[] = [],
+): HeroLayout {
   const isNarrow = isNarrowHero(widthPx, scale);
   const leftPx = isNarrow ? 0 : 34 * scale;
   const words = wordsOf(facts);
@@ -97,6 +103,7 @@ export function layoutHero(facts: HeroFacts, widthPx: number, scale: number): He
         upright(plot, facts, facts.clearByAt, clearPostTopPx),
         upright(plot, facts, facts.offByAt, offPostTopPx),
         upright(plot, facts, facts.startsAt, topPx),
+        ...levelsM.map((heightM) => across(plot, heightM)),
       ];
   const place: Place = (key, ...places) => {
     const label = places
@@ -277,6 +284,11 @@ function upright(plot: Plot, facts: HeroFacts, at: Instant, fromPx: number): Box
     y1: fromPx,
     y2: heightM === null ? plot.basePx : yOf(plot, heightM),
   };
+}
+
+function across(plot: Plot, heightM: number): Box {
+  const y = yOf(plot, heightM);
+  return { x1: 0, x2: plot.widthPx, y1: y - 1, y2: y + 1 };
 }
 
 function inside(box: Box, frame: Box): boolean {

@@ -48,11 +48,7 @@ export function LevelLines(props: {
         strokeDasharray="6 4"
         d={`M0 ${yOf(plot, level.heightM)}H${plot.widthPx}`}
       />
-      <text
-        className="fill-ink text-xs tabular-nums"
-        x={plot.widthPx + GAP_PX}
-        y={wordsY[index]}
-      >
+      <text className="fill-ink text-xs tabular-nums" x={plot.widthPx + GAP_PX} y={wordsY[index]}>
         {wordsOf(level, isNarrow)}
       </text>
     </g>

@@ -43,7 +43,7 @@ export function RadioList(props: {
       <ul className="mt-1">
         {choices.map((choice, index) => (
           <li key={choice.value} className="flex gap-2.5 border-hair py-1 [li+&]:border-t">
-            <span className="relative mt-1 grid size-5 flex-none place-items-center">
+            <span className="relative mt-0.5 grid size-5 flex-none place-items-center max-wide:mt-2.5">
               <input
                 id={`${id}-${index}`}
                 type="radio"

@@ -56,10 +56,7 @@ export function SeasonStrip(props: SeasonStripProps) {
       <Dark plot={plot} fromAt={props.sunsetAt} untilAt={untilAt} />
       {sand !== null && (
         <>
-          <path
-            className="fill-sand"
-            d={sandPath(plot, curve, sand.fromAt, sand.offByAt, 0)}
-          />
+          <path className="fill-sand" d={sandPath(plot, curve, sand.fromAt, sand.offByAt, 0)} />
           <Upright plot={plot} curve={curve} at={sand.fromAt} look="edge" />
         </>
       )}
@@ -100,13 +97,7 @@ function Dark(props: {
   const x2 = Math.min(plot.widthPx, xOf(plot, untilAt));
   if (x2 <= x1) return null;
   return (
-    <rect
-      className="fill-barnacle opacity-15"
-      x={x1}
-      y="0"
-      width={x2 - x1}
-      height={HEIGHT_PX}
-    />
+    <rect className="fill-barnacle opacity-15" x={x1} y="0" width={x2 - x1} height={HEIGHT_PX} />
   );
 }
 
@@ -129,7 +120,11 @@ function Upright(props: {
   const y = yOf(plot, heightM);
   return (
     <>
-      <path className={looks[look].className} strokeWidth={looks[look].widthPx} d={`M${x} 0V${y}`} />
+      <path
+        className={looks[look].className}
+        strokeWidth={looks[look].widthPx}
+        d={`M${x} 0V${y}`}
+      />
       {look === 'post' && <circle className="fill-ink" cx={x} cy={y} r="2.6" />}
     </>
   );

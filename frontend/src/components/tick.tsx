@@ -1,6 +1,8 @@
 /** A box to tick with its words. */
 export function Tick(props: {
   readonly words: string;
+  /** More words that are spoken and not shown: which of many boxes it is. */
+  readonly spoken?: string;
   readonly isTicked: boolean;
   readonly onChange: (isTicked: boolean) => void;
 }) {
@@ -23,7 +25,10 @@ export function Tick(props: {
           <path strokeWidth="2" d="M1 5L4.5 8.5L11 1.5" />
         </svg>
       </span>
-      {props.words}
+      <span>
+        {props.words}
+        {props.spoken !== undefined && <span className="sr-only"> {props.spoken}</span>}
+      </span>
     </label>
   );
 }

@@ -32,10 +32,16 @@ export function TideHero(props: {
   const { facts, shoreName, levels = [] } = props;
   const [ref, widthPx] = useMeasuredWidth<HTMLElement>();
   const scale = textScale();
-  const rightPx =
-    widthPx === null ? 0 : levelsWidthPx(levels, isNarrowHero(widthPx, scale), scale);
+  const rightPx = widthPx === null ? 0 : levelsWidthPx(levels, isNarrowHero(widthPx, scale), scale);
   const layout =
-    widthPx === null || widthPx <= rightPx ? null : layoutHero(facts, widthPx - rightPx, scale);
+    widthPx === null || widthPx <= rightPx
+      ? null
+      : layoutHero(
+          facts,
+          widthPx - rightPx,
+          scale,
+          levels.map(({ heightM }) => heightM),
+        );
   return (
     <figure ref={ref} className="min-h-56">
       {layout !== null && (
@@ -206,6 +212,7 @@ function UnplacedTimes({ facts, keys }: { facts: HeroFacts; keys: readonly HeroL
     'off-by': `off the shore by ${clock(facts.offByAt)}`,
     'clear-by': `lower shore clear by ${clock(facts.clearByAt)}`,
     'low-water': `low water ${clockOfWater(facts.lowWaterAt, facts.zone)}`,
+    'low-height': `${metres(facts.lowWaterHeightM)} m at low water`,
     starts: `on the shore ${clock(facts.startsAt)}`,
     'crew-meets': `crew meet ${clock(facts.crewMeetsAt)}`,
     'party-meets': `party meets ${clock(facts.partyMeetsAt)}`,
@@ -215,6 +222,7 @@ function UnplacedTimes({ facts, keys }: { facts: HeroFacts; keys: readonly HeroL
     'party-meets',
     'starts',
     'low-water',
+    'low-height',
     'clear-by',
     'off-by',
   ];

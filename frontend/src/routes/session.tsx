@@ -1,7 +1,8 @@
 import { useQuery, useQueryClient, useSuspenseQuery } from '@tanstack/react-query';
-import { Link, useParams } from 'react-router-dom';
+import { useParams } from 'react-router-dom';
 import { ProblemError } from '#frontend/api/problem-error.ts';
 import { sayProblem } from '#frontend/api/say-problem.ts';
+import { BackLink } from '#frontend/components/back-link.tsx';
 import { Button } from '#frontend/components/button.tsx';
 import { LoadingWash } from '#frontend/components/loading-wash.tsx';
 import { PageHeading, PageTitle } from '#frontend/components/page-heading.tsx';
@@ -63,17 +64,9 @@ function SessionPage({ session }: { session: SessionView }) {
   return (
     <div className="px-4 pt-3.5 pb-10 wide:px-page wide:pb-14">
       <PageTitle>{name}</PageTitle>
-      <nav aria-label="Back">
-        <Link
-          className="inline-flex min-h-7 items-center gap-2 text-sm"
-          to={`/?month=${monthInAddress(session.dayOn)}`}
-        >
-          <svg viewBox="0 0 8 12" width="8" height="12" aria-hidden>
-            <path className="fill-none stroke-deep" strokeWidth="1.75" d="M7 1L2 6l5 5" />
-          </svg>
-          {formatDay(session.dayOn, 'monthYear')}
-        </Link>
-      </nav>
+      <BackLink to={`/?month=${monthInAddress(session.dayOn)}`}>
+        {formatDay(session.dayOn, 'monthYear')}
+      </BackLink>
       <div className="mt-1 mb-3 flex flex-wrap items-end justify-between gap-x-6 gap-y-2.5">
         <div className="min-w-0">
           <PageHeading>{name}</PageHeading>

@@ -2,12 +2,10 @@ import type { AppContext } from '#backend/app-context.ts';
 import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
 import type { ShorePlace, ShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
-import { usableDaysFrom, windowOn } from '#shared/domain/tides/shore-water.ts';
+import { usableDaysInYear, windowOn } from '#shared/domain/tides/shore-water.ts';
 import type { ShoreRules } from '#shared/domain/tides/shore-water.ts';
 import type { CalendarDay } from '#shared/kernel/time.ts';
 import { addDays, dayAt } from '#shared/kernel/time.ts';
-
-const yearDays = 365;
 
 /** What settings that nobody has saved would mean. */
 export interface ShorePreview {
@@ -34,7 +32,7 @@ export async function previewShore(
     });
   }
   const todayOn = dayAt(ctx.clock.now(), shore.zone);
-  const usable = usableDaysFrom(shore, tide.curve, todayOn, yearDays);
+  const usable = usableDaysInYear(shore, tide.curve, todayOn);
   return { tide, on: on ?? usable[0] ?? todayOn, usableDays: usable.length };
 }
 

@@ -1,11 +1,8 @@
 import type { AppContext, Tx } from '#backend/app-context.ts';
 import { databaseError } from '#backend/database/transaction.ts';
-import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
 import type { Actor } from '#backend/http/route.ts';
-import { astronomicalRange } from '#shared/domain/tides/astronomical-range.ts';
 import type { ShoreId } from '#shared/kernel/ids.ts';
-import { dayAt, yearOf } from '#shared/kernel/time.ts';
 import { insertShore, lockShore, updateShore } from './shores.repository.ts';
 import type { ShoreValues } from './shores.repository.ts';
 import { readShore } from './shores.reader.ts';
@@ -95,8 +92,8 @@ function recordChange(
 }
 
 async function withRange(ctx: AppContext, wish: ShoreWish): Promise<ShoreValues> {
-  const tide = await ctx.reading((read) => readShoreTide(ctx.tides, read, wish));
-  if (tide === null) {
+  const range = await ctx.tides.rangeAt(wish.tideStationId);
+  if (range === null) {
     throw new Problem('not-understood', 'The shore was not saved', {
       fields: [
         {
@@ -107,15 +104,11 @@ async function withRange(ctx: AppContext, wish: ShoreWish): Promise<ShoreValues>
       ],
     });
   }
-  const predicted = await ctx.tides.at(wish.tideStationId);
-  const { lowestM, highestM } = astronomicalRange(
-    predicted?.curve ?? tide.curve,
-    yearOf(dayAt(ctx.clock.now(), wish.zone)),
-  );
+  const { low, high } = wish.differences;
   return {
     ...wish,
-    lowestTideM: lowestM + wish.differences.low.higherM,
-    highestTideM: highestM + wish.differences.high.higherM,
+    lowestTideM: range.lowestM * low.heightFactor + low.higherM,
+    highestTideM: range.highestM * high.heightFactor + high.higherM,
   };
 }
 

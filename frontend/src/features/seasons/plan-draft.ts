@@ -53,7 +53,10 @@ const MOST_SLOTS = 20;
 export function newDraft(view: PlansView): PlanDraft | null {
   const shore = view.shores[0];
   if (shore === undefined) return null;
-  const fromOn = addDays(view.today, (SATURDAY - weekdayOf(view.today) + DAYS_A_WEEK) % DAYS_A_WEEK);
+  const fromOn = addDays(
+    view.today,
+    (SATURDAY - weekdayOf(view.today) + DAYS_A_WEEK) % DAYS_A_WEEK,
+  );
   return {
     name: '',
     shoreId: shore.id,

@@ -1,8 +1,8 @@
 import { hoursAndMinutes } from '#frontend/words/duration-words.ts';
 import { sayNoWindow } from '#frontend/words/no-window-words.ts';
 import type { PlanDate, PlanPreview, PlanSettings } from '#shared/contracts/season-plans.ts';
-import type { CalendarDay } from '#shared/kernel/time.ts';
-import { clockAt, formatDay, fromIso, yearOf } from '#shared/kernel/time.ts';
+import type { CalendarDay, Instant } from '#shared/kernel/time.ts';
+import { clockAt, formatDay, fromIso, instantOf, yearOf } from '#shared/kernel/time.ts';
 import { metres } from '#frontend/words/tide-words.ts';
 
 const ONE_WEEKDAY = /^Every (?<weekday>(?:Mon|Tues|Wednes|Thurs|Fri|Satur|Sun)day)$/;
@@ -53,15 +53,39 @@ export function skippedInWords(date: PlanDate, zone: string): string {
     case 'other-date':
       return 'another date of the plan is on this day';
     case 'rules':
-    case null: {
-      const { reasons } = date.day;
-      // The other low water of the day is mostly at night, which goes without saying.
-      const telling = reasons.filter(({ why }) => why !== 'dark');
-      return (telling.length > 0 ? telling : reasons)
-        .map((reason) => sayNoWindow(reason, zone))
-        .join('; ');
-    }
+    case null:
+      return tellingReason(date, zone);
   }
+}
+
+type Reason = PlanDate['day']['reasons'][number];
+
+/**
+ * What stands against the likelier low water of a day. The other one is mostly at night, which
+ * goes without saying, as does the dark where something else is in the way too.
+ */
+function tellingReason({ day }: PlanDate, zone: string): string {
+  const noonAt = instantOf(day.on, '12:00', zone);
+  const lows = [...new Set(day.reasons.map(lowWaterOf))].sort((a, b) => {
+    const against = (at: Instant | null): number =>
+      day.reasons.filter((one) => lowWaterOf(one) === at && isByTheClock(one)).length;
+    const away = (at: Instant | null): number => (at === null ? 0 : Math.abs(at - noonAt));
+    return against(a) - against(b) || away(a) - away(b);
+  });
+  const ofLow = day.reasons.filter((one) => lowWaterOf(one) === lows[0]);
+  const telling = ofLow.filter(({ why }) => why !== 'dark');
+  const [first = '', ...others] = (telling.length > 0 ? telling : ofLow).map((reason) =>
+    sayNoWindow(reason, zone),
+  );
+  return [first, ...others.map((words) => words.replace(/^low water \S+ ?/, ''))].join(', ');
+}
+
+function lowWaterOf(reason: Reason): Instant | null {
+  return reason.why === 'no-low-water' ? null : fromIso(reason.lowWaterAt);
+}
+
+function isByTheClock({ why }: Reason): boolean {
+  return why === 'dark' || why === 'out-of-hours';
 }
 
 /** What of a taken date is not as usual: 'cut at 07:00, 2:15 left', 'by hand, 1:16 left'. */
@@ -99,12 +123,12 @@ function cutWords(cut: Cut, day: PlanDate['day'], zone: string): string[] {
       const awayMinutes =
         sunIso === null ? Infinity : Math.abs(fromIso(cut.at) - fromIso(sunIso)) / 60_000;
       if (awayMinutes <= 1) return [isStart ? 'at sunrise' : 'at sunset'];
-      return [isStart ? `by the dark before ${clock}` : `by the dark after ${clock}`];
+      return ['by the dark'];
     }
     case 'working-level':
-      return [isStart ? `by high water before ${clock}` : `by the water at ${clock}`];
+      return ['by the water'];
     case 'cut-off-level':
-      return [isStart ? `by the way off, clear at ${clock}` : `by the way off at ${clock}`];
+      return ['by the way off'];
   }
 }
 

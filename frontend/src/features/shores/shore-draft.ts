@@ -141,12 +141,9 @@ export function readDraft(draft: ShoreDraft): DraftRead {
 export function readWater(draft: ShoreDraft): ShoreWater | null {
   const errors: Partial<Record<DraftPath, string>> = {};
   const figures = figuresOf(draft, errors);
-  const isWhole = [
-    draft.zone,
-    draft.tideStationId,
-    draft.earliestClock,
-    draft.latestClock,
-  ].every((text) => text.trim() !== '');
+  const isWhole = [draft.zone, draft.tideStationId, draft.earliestClock, draft.latestClock].every(
+    (text) => text.trim() !== '',
+  );
   return isWhole && Object.keys(errors).length === 0 ? waterOf(draft, figures) : null;
 }
 

@@ -6,13 +6,7 @@ import type { CalendarDay } from '#shared/kernel/time.ts';
 /** The settings of a shore that decide which days and hours it can be worked. */
 export type ShoreWater = Omit<
   ShoreSettings,
-  | 'name'
-  | 'meetingPlace'
-  | 'hazards'
-  | 'waysOff'
-  | 'phoneSignal'
-  | 'emergencyWords'
-  | 'ratioPreset'
+  'name' | 'meetingPlace' | 'hazards' | 'waysOff' | 'phoneSignal' | 'emergencyWords' | 'ratioPreset'
 >;
 
 export interface Position {
@@ -38,7 +32,9 @@ export const shoresQueries = {
     queryOptions({
       queryKey: [...shoresQueries.root, 'stations', at],
       queryFn:
-        at === null ? skipToken : ({ signal }) => call('findStations', { query: { ...at } }, signal),
+        at === null
+          ? skipToken
+          : ({ signal }) => call('findStations', { query: { ...at } }, signal),
       placeholderData: keepPreviousData,
     }),
   /** Nothing is asked without settings; the water of those before stays meanwhile. */

@@ -4,7 +4,6 @@ import type { TideCurve } from '#shared/domain/tides/tide-curve.ts';
 import type { NoWindowReason, WorkingWindow } from '#shared/domain/tides/working-window.ts';
 import { granted } from '#shared/kernel/result.ts';
 import type { Verdict } from '#shared/kernel/result.ts';
-import { addDays, addMonths } from '#shared/kernel/time.ts';
 import type { CalendarDay, ClockTime } from '#shared/kernel/time.ts';
 
 /**
@@ -86,16 +85,6 @@ export function windowTakenByHand(
     if (verdict.isGranted) return granted({ window: verdict.value, overruled });
   }
   return verdict;
-}
-
-/** How many days of the year that begins on fromOn have a working window by the shore's own rules. */
-export function usableDaysInYear(shore: ShoreRules, curve: TideCurve, fromOn: CalendarDay): number {
-  const endsBeforeOn = addMonths(fromOn, 12);
-  let days = 0;
-  for (let on = fromOn; on < endsBeforeOn; on = addDays(on, 1)) {
-    if (windowOn(shore, curve, on).isGranted) days += 1;
-  }
-  return days;
 }
 
 function withoutRules(rules: ShoreRules, overruled: readonly OverruledRule[]): ShoreRules {

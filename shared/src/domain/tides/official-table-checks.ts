@@ -10,12 +10,20 @@ interface Marked extends Settled {
   readonly kind: 'high' | 'low';
 }
 
+interface DatedRow {
+  readonly row: number;
+  readonly at: number;
+}
+
 interface Checked {
   readonly events: readonly TableEvent[];
   readonly problems: readonly TableProblem[];
 }
 
 const CLOSEST_MS = 2 * 3_600_000;
+
+/** A date further from the middle of a year's table has a slip in its year. */
+const FARTHEST_MS = 400 * 24 * 3_600_000;
 
 /** A gap so much longer than the usual one hides a high or low water that is not in the table. */
 const GAP_WITH_ONE_MISSING = 1.5;
@@ -74,27 +82,34 @@ function withoutRepeats(events: readonly ReadEvent[], report: Report): ReadEvent
   });
 }
 
-/** Keeps the longest run of lines whose times rise, so that a slip condemns itself alone. */
+/**
+ * Keeps the longest run of lines whose times rise, so that a slip condemns itself alone, and of
+ * these the ones within some thirteen months of the middle one.
+ */
 function withoutStrays(events: readonly ReadEvent[], report: Report): ReadEvent[] {
-  const rows = new Map<number, { readonly row: number; readonly at: number }>();
+  const rows = new Map<number, DatedRow>();
   for (const { row, shownAt } of events) {
     const at = Math.min(shownAt[0], rows.get(row)?.at ?? Infinity);
     rows.set(row, { row, at });
   }
-  const kept = longestRise([...rows.values()]);
+  const rise = longestRise([...rows.values()]);
+  const middleAt = rise[Math.floor(rise.length / 2)]?.at ?? 0;
+  const kept = new Set(
+    rise.filter(({ at }) => Math.abs(at - middleAt) <= FARTHEST_MS).map(({ row }) => row),
+  );
   const strays = new Set<number>();
   return events.filter((event) => {
     if (kept.has(event.row)) return true;
     if (!strays.has(event.row)) {
       strays.add(event.row);
-      const message = `${event.text} is out of order among the lines round it.`;
+      const message = `${event.text} is out of order, or far from the other dates.`;
       report(event.row, 'out-of-order', message);
     }
     return false;
   });
 }
 
-function longestRise(rows: readonly { readonly row: number; readonly at: number }[]): Set<number> {
+function longestRise(rows: readonly DatedRow[]): DatedRow[] {
   // The last place of the best run of each length, and for each place the one before it.
   const ends: number[] = [];
   const before: (number | undefined)[] = [];
@@ -111,10 +126,10 @@ function longestRise(rows: readonly { readonly row: number; readonly at: number 
     before[place] = ends[low - 1];
     ends[low] = place;
   });
-  const kept = new Set<number>();
+  const kept: DatedRow[] = [];
   for (let place = ends.at(-1); place !== undefined; place = before[place]) {
-    const row = rows[place]?.row;
-    if (row !== undefined) kept.add(row);
+    const row = rows[place];
+    if (row !== undefined) kept.push(row);
   }
   return kept;
 }

@@ -22,6 +22,9 @@ type Role = 'time' | 'height' | 'either';
 /** A column in which fewer can be read as a time holds no times, whatever mistakes it has. */
 const SHARE_OF_CLOCK = 0.8;
 
+/** Of a day: four, and as many again at places where high waters are double. */
+const MOST_EVENTS = 8;
+
 const TIME_WORD = /\b(?:time|hour|clock)\b/i;
 const HEIGHT_WORD = /\b(?:height|heights|ht|hgt|level|pred|cm|ft|feet|m|metres?|meters?)\b/i;
 const KIND_WORD = /\b(?<word>high|low|hw|lw)\b/gi;
@@ -31,14 +34,20 @@ const KIND_WORD = /\b(?<word>high|low|hw|lw)\b/gi;
  * null where it stays. Among spaces an empty place does not show, so that the kinds over columns
  * only count when every line fills them all.
  */
-export function eventColumns({ separator, rows, heading }: TableLines): EventColumns | null {
+export function eventColumns({
+  separator,
+  rows,
+  heading,
+  otherColumns,
+}: TableLines): EventColumns | null {
   const marks: number[] = [];
   const roles: { readonly column: number; readonly role: Role }[] = [];
-  for (const [column, tokens] of [...byColumn(rows)].sort(([a], [b]) => a - b)) {
+  for (const [column, tokens] of [...byColumn(rows.filter(isFigures))].sort(([a], [b]) => a - b)) {
     const marked = tokens.filter(({ shape }) => shape === 'mark').length;
     const words = tokens.filter(({ shape }) => shape === 'word').length;
     if (marked * 2 >= tokens.length) marks.push(column);
-    else if (words * 2 < tokens.length) roles.push({ column, role: roleOf(tokens) });
+    else if (words * 2 < tokens.length && !otherColumns.has(column))
+      roles.push({ column, role: roleOf(tokens) });
   }
   const settled = settle(
     roles.map(({ role }) => role),
@@ -49,6 +58,7 @@ export function eventColumns({ separator, rows, heading }: TableLines): EventCol
     roles.filter((_, place) => settled[place] === role).map(({ column }) => column);
   const times = columnsOf('time');
   const heights = columnsOf('height');
+  if (times.length > MOST_EVENTS) return null;
   const heightsEach = heights.length / times.length;
   if (heightsEach !== 1 && heightsEach !== 2) return null;
   const isPlaced =
@@ -66,6 +76,12 @@ export function eventColumns({ separator, rows, heading }: TableLines): EventCol
     isTimeFirst,
     isHeadingSwapped: isHeadingTimeFirst(heading) === !isTimeFirst,
   };
+}
+
+/** A line of words, such as one at the foot of a page, says nothing of the columns. */
+function isFigures({ dates, values }: TableLine): boolean {
+  const words = [...values.values()].filter(({ shape }) => shape === 'word').length;
+  return words * 2 < dates.length + values.size;
 }
 
 function byColumn(rows: readonly TableLine[]): Map<number, Token[]> {

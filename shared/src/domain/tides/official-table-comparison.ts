@@ -48,6 +48,9 @@ const SAME_TIME_MINUTES = 15;
 const SAME_HEIGHT_M = 0.25;
 const MOST = 0.8;
 
+/** A mistake of the zone is a whole step to this; a constant between the steps is of the place. */
+const ZONE_MINUTES = 6;
+
 /** Tables that are right in winter and an hour off in summer change over twice a year. */
 const MOST_CHANGES = 6;
 
@@ -147,6 +150,10 @@ function bestShift(events: readonly TableEvent[], extremes: readonly TideExtreme
     });
     // A centimetre counts as a minute: in times alone one tide looks much like the next.
     const off = median(offs);
+    const late = median(
+      pairs.map(({ event, predicted }) => (event.at - predicted.at) / MINUTE_MS - minutes),
+    );
+    if (minutes !== 0 && (late === null || Math.abs(late) > ZONE_MINUTES)) return Infinity;
     const scatterM = heightScatterM(pairs);
     return off === null || scatterM === null ? Infinity : off + 100 * scatterM;
   };

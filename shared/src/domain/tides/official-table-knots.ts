@@ -74,7 +74,16 @@ export function knotsOf(
     const own = unpaired.filter(({ at }) => at > end.at).map(extremeOf);
     knots.push(...between(end, own, inserted(placeOf(end) + 1, plain.length), undefined));
   }
-  return { knots, plain };
+  return { knots: withOneUnmovedAside(knots, plain), plain };
+}
+
+/** Past the first that is not moved the curve is the plain one. */
+function withOneUnmovedAside(knots: readonly Knot[], plain: readonly TideExtreme[]): Knot[] {
+  const isMoved = ({ plain: place, at, heightM }: Knot): boolean => {
+    const extreme = place === null ? undefined : plain[place];
+    return extreme?.at !== at || extreme.heightM !== heightM;
+  };
+  return knots.slice(Math.max(0, knots.findIndex(isMoved) - 1), knots.findLastIndex(isMoved) + 2);
 }
 
 function extremeOf({ at, kind, heightM }: TideExtreme): Knot {

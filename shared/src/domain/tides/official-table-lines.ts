@@ -7,6 +7,9 @@ import type { Token } from './official-table-tokens.ts';
 /** The largest text that is taken for a table, for whoever receives the upload to apply too. */
 export const OFFICIAL_TABLE_LIMIT_BYTES = 5_000_000;
 
+/** A year has some 1,411 highs and lows, here with room for a line to each and more between. */
+const LIMIT_LINES = 10_000;
+
 /** A line taken apart. */
 export interface TableLine {
   readonly row: number;
@@ -24,6 +27,8 @@ export interface TableLines {
   /** Whatever stands above the rows; the last may be the heading of the columns. */
   readonly above: readonly string[];
   readonly heading: string | null;
+  /** The columns that the heading says to be neither time nor height, such as a running number. */
+  readonly otherColumns: ReadonlySet<number>;
   readonly rows: readonly TableLine[];
 }
 
@@ -43,14 +48,23 @@ const WITHIN_CELL = 16;
 const HEADING_WORD =
   /\b(?:date|day|time|hour|height|heights|ht|high|low|hw|lw|water|pred|level|type|m|cm|ft|feet|metres?|meters?)\b/gi;
 
+const OTHER_COLUMN = /^(?:#|no\.?|number|row|line|coef\w*\.?|range|moon.*|week)$/i;
+
+/** Longer ones are prose: no row of a day is a quarter of this. */
+const LONGEST_LINE = 1_000;
+
 /** Refuses what is no text before it is looked at any further. */
 export function linesOf(text: string): Verdict<TableLines, TableRefusal> {
-  if (text.length > OFFICIAL_TABLE_LIMIT_BYTES) {
-    return refused({ why: 'too-large', limitBytes: OFFICIAL_TABLE_LIMIT_BYTES });
-  }
+  const tooLarge = refused({
+    why: 'too-large',
+    limitBytes: OFFICIAL_TABLE_LIMIT_BYTES,
+    limitLines: LIMIT_LINES,
+  } as const);
+  if (text.length > OFFICIAL_TABLE_LIMIT_BYTES) return tooLarge;
   const binary = binaryKind(text);
   if (binary !== null) return refused({ why: binary });
   const lines = text.replace(/^\ufeff/, '').split(/\r\n|\n|\r/);
+  if (lines.length > LIMIT_LINES) return tooLarge;
   if (lines.every((line) => line.trim() === '')) return refused({ why: 'empty' });
   return inColumns(lines);
 }
@@ -107,8 +121,16 @@ function inColumns(lines: readonly string[]): Verdict<TableLines, TableRefusal> 
     separator,
     above: lines.slice(0, first),
     heading: lines[heading] ?? null,
+    otherColumns: otherColumns(lines[heading] ?? '', mark),
     rows: parsed.slice(first).filter(isRow),
   });
+}
+
+function otherColumns(heading: string, mark: string | null): Set<number> {
+  const columns = mark === null ? [] : cellsOf(heading, mark);
+  return new Set(
+    columns.flatMap((cell, place) => (OTHER_COLUMN.test(cell.trim()) ? [place * WITHIN_CELL] : [])),
+  );
 }
 
 function piecesOf(line: TableLine | undefined): number {
@@ -127,7 +149,8 @@ function isHeading(line: string): boolean {
 function lineOf(text: string, row: number, mark: string | null): TableLine {
   const dates: Extract<Token, { shape: 'date' }>[] = [];
   const values = new Map<number, Token>();
-  cellsOf(text, mark).forEach((cell, place) => {
+  const cells = text.length > LONGEST_LINE ? [] : cellsOf(text, mark);
+  cells.forEach((cell, place) => {
     let column = place * WITHIN_CELL;
     for (const token of tokensOf(cell)) {
       if (token.shape === 'date') dates.push(token);

@@ -7,7 +7,7 @@ export interface EventPair<Event extends TideExtreme = TideExtreme> {
 }
 
 /** Half of the time between a high and a low water; further apart, two are not the same tide. */
-export const PAIRED_WITHIN_MS = 3 * 3_600_000;
+const PAIRED_WITHIN_MS = 3 * 3_600_000;
 
 /**
  * Pairs each event with the predicted extreme of its kind that is nearest to it and has no nearer

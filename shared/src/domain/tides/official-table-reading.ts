@@ -69,7 +69,7 @@ export interface OfficialTable {
 /** Why a text as a whole cannot be read as a table. */
 export type TableRefusal =
   | { readonly why: 'empty' }
-  | { readonly why: 'too-large'; readonly limitBytes: number }
+  | { readonly why: 'too-large'; readonly limitBytes: number; readonly limitLines: number }
   | { readonly why: 'spreadsheet' }
   | { readonly why: 'not-text' }
   | { readonly why: 'header-only' }

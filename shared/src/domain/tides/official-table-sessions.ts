@@ -24,7 +24,7 @@ const MINUTE_MS = 60_000;
 const SAME_LOW_MS = 6 * 60 * MINUTE_MS;
 
 /** Sessions whose low water moves by no more than this keep their times without a word. */
-export const MOVED_MINUTES = 5;
+const MOVED_MINUTES = 5;
 
 /**
  * The sessions whose low water moves by more than 5 minutes when one curve takes the place of

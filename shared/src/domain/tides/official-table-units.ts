@@ -15,7 +15,7 @@ export interface UnitReading {
   readonly from: TableLayout['unitsFrom'];
 }
 
-type Refusal = Extract<TableRefusal, { why: 'units-unclear' }>;
+type Refusal = Extract<TableRefusal, { why: 'units-unclear' | 'columns-unclear' }>;
 
 const UNITS: readonly HeightUnit[] = ['m', 'cm', 'ft'];
 
@@ -81,7 +81,8 @@ function ofTwo(
       best = units;
     }
   }
-  if (best === null) return refused({ why: 'units-unclear' });
+  // Heights that agree in no two units are no heights of one tide: one of the columns is no height.
+  if (best === null) return refused({ why: 'columns-unclear' });
   const [pair = []] = heights;
   const finest = best.map((unit, place) => stepM(pair[place], unit));
   const byStep = finest.indexOf(Math.min(...finest));

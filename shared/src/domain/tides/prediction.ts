@@ -6,7 +6,7 @@ import type { TideDifferences } from './differences.ts';
 import { harmonicSum } from './harmonic-sum.ts';
 import type { StationWave } from './harmonic-sum.ts';
 import { heightsAtSteps } from './tide-curve.ts';
-import type { TideCurve } from './tide-curve.ts';
+import type { TideCurve, TideExtreme } from './tide-curve.ts';
 import { turningPoints } from './turning-points.ts';
 
 /** What is needed to predict the tide at a place. */
@@ -62,17 +62,36 @@ export function tideCurve(station: TideStation): Verdict<TideCurve, CurveRefusal
   );
 }
 
+/** Turns are found block by block and kept: a year of days asks for the same ones again and again. */
+const BLOCK_MS = 16 * 86_400_000;
+const MOST_BLOCKS = 64;
+
 function harmonicCurve(waves: readonly StationWave[], meanLevelM: number): TideCurve {
   const sum = harmonicSum(waves);
   const heightAtM: TideCurve['heightAtM'] = (at) => meanLevelM + sum.heightAtM(at);
+  const blocks = new Map<number, readonly TideExtreme[]>();
+  const extremesOfBlock = (block: number): readonly TideExtreme[] => {
+    const kept = blocks.get(block);
+    if (kept !== undefined) return kept;
+    const found = turningPoints(sum, block * BLOCK_MS, (block + 1) * BLOCK_MS).map(
+      ({ at, kind, heightM }) => ({ at, kind, heightM: meanLevelM + heightM }),
+    );
+    const oldest = blocks.keys().next().value;
+    if (blocks.size >= MOST_BLOCKS && oldest !== undefined) blocks.delete(oldest);
+    blocks.set(block, found);
+    return found;
+  };
   return {
     heightAtM,
     series: (fromAt, toAt, stepMinutes) => heightsAtSteps(heightAtM, fromAt, toAt, stepMinutes),
-    extremes: (fromAt, toAt) =>
-      turningPoints(sum, fromAt, toAt).map(({ at, kind, heightM }) => ({
-        at,
-        kind,
-        heightM: meanLevelM + heightM,
-      })),
+    extremes: (fromAt, toAt) => {
+      const found: TideExtreme[] = [];
+      for (let block = Math.floor(fromAt / BLOCK_MS); block * BLOCK_MS < toAt; block += 1) {
+        for (const one of extremesOfBlock(block)) {
+          if (one.at >= fromAt && one.at < toAt) found.push(one);
+        }
+      }
+      return found;
+    },
   };
 }

@@ -1,6 +1,6 @@
 import type { Verdict } from '#shared/kernel/result.ts';
 import { sunOn } from '#shared/kernel/sun.ts';
-import { addDays, instantOf, startOfDay } from '#shared/kernel/time.ts';
+import { addDays, addMonths, instantOf, startOfDay } from '#shared/kernel/time.ts';
 import type { CalendarDay, ClockTime } from '#shared/kernel/time.ts';
 import type { TideCurve, TideExtreme } from './tide-curve.ts';
 import { DEFAULT_WINDOW_SETTINGS, workingWindow } from './working-window.ts';
@@ -51,16 +51,15 @@ export function windowOn(
   });
 }
 
-/** The days with a working window among so many from the first one on. */
-export function usableDaysFrom(
+/** The days with a working window, by the shore's own rules, in the year that begins on a day. */
+export function usableDaysInYear(
   shore: ShoreRules,
   curve: TideCurve,
   fromOn: CalendarDay,
-  days: number,
 ): CalendarDay[] {
+  const endsBeforeOn = addMonths(fromOn, 12);
   const usable: CalendarDay[] = [];
-  for (let ahead = 0; ahead < days; ahead += 1) {
-    const on = addDays(fromOn, ahead);
+  for (let on = fromOn; on < endsBeforeOn; on = addDays(on, 1)) {
     if (windowOn(shore, curve, on).isGranted) usable.push(on);
   }
   return usable;
