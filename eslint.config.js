@@ -39,7 +39,12 @@ export default tseslint.config(
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true }],
       // A new id takes its kind from where it goes.
       '@typescript-eslint/no-unnecessary-type-parameters': 'off',
-      '@typescript-eslint/switch-exhaustiveness-check': 'error',
+      // A default that is written stands for the cases that it takes.
+      '@typescript-eslint/switch-exhaustiveness-check': [
+        'error',
+        { considerDefaultExhaustiveForUnions: true },
+      ],
+      '@typescript-eslint/no-unused-vars': ['error', { ignoreRestSiblings: true }],
       'check-file/filename-naming-convention': [
         'error',
         { '**/*.{ts,tsx,mjs}': 'KEBAB_CASE' },

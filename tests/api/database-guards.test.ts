@@ -275,7 +275,9 @@ describe('entities and migrations', () => {
     const clone = await cloneDatabase();
     const owner = await ownerDataSource(clone.ownerUrl).initialize();
     try {
-      for (const _migration of owner.migrations) await owner.undoLastMigration();
+      for (let left = owner.migrations.length; left > 0; left -= 1) {
+        await owner.undoLastMigration();
+      }
       const left: { name: string }[] = await owner.query(
         `SELECT relname AS name FROM pg_class
           WHERE relkind = 'r' AND relnamespace = 'public'::regnamespace`,

@@ -49,9 +49,8 @@ const settings: ShoreSettings = {
   emergencyWords: 'Dial the emergency number of your country and ask for the coastguard.',
   ratioPreset: 'families',
 };
-const { name: _name, meetingPlace: _place, hazards: _hazards, ...rest } = settings;
-const { waysOff: _ways, phoneSignal: _signal, emergencyWords: _words, ...more } = rest;
-const { ratioPreset: _preset, ...water } = more;
+const { name, meetingPlace, hazards, waysOff, phoneSignal, emergencyWords, ratioPreset, ...water } =
+  settings;
 
 describe('a shore', () => {
   it('is made, shown as it was set up, and changed', async () => {

@@ -275,7 +275,9 @@ describe('the usable days of a year', () => {
   it('are all of them where every noon is low water, and none where none is low enough', () => {
     expect(usableDaysInYear(SHORE, NOON_LOWS, '2026-06-05')).toHaveLength(365);
     expect(usableDaysInYear(SHORE, NOON_LOWS, '2027-06-05')).toHaveLength(366);
-    expect(usableDaysInYear({ ...SHORE, workingLevelM: 0.4 }, NOON_LOWS, '2027-06-05')).toHaveLength(0);
+    expect(
+      usableDaysInYear({ ...SHORE, workingLevelM: 0.4 }, NOON_LOWS, '2027-06-05'),
+    ).toHaveLength(0);
   });
 });
 

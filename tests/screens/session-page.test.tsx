@@ -65,7 +65,7 @@ describe('the page of a session', () => {
     ).toBeInTheDocument();
     expect(
       screen.getByText(
-        'Tide station Outer Skerrow, 54.61° N, 1.14° W. Heights in metres above LAT. Invented for these pages.',
+        'Outer Skerrow, 54.61° N, 1.14° W. Heights in metres above LAT. Invented for these pages.',
       ),
     ).toBeInTheDocument();
   });

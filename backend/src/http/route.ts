@@ -6,6 +6,7 @@ import type { PersonId } from '#shared/kernel/ids.ts';
 import type { Action, policy, Role } from '#shared/policy/policy.ts';
 import { may } from '#shared/policy/policy.ts';
 import { Problem } from './problem.ts';
+import { isOwnWording, sayIssue } from './say-issue.ts';
 import type { SignIn } from './sign-in.ts';
 
 /** Who is asking. Roles are read from the database at every request. */
@@ -87,7 +88,11 @@ function parse(contract: Contract, request: Request) {
     const result = schema.safeParse(value);
     if (result.success) return result.data;
     for (const issue of result.error.issues) {
-      fields.push({ where, field: issue.path.join('.'), message: issue.message });
+      fields.push({
+        where,
+        field: issue.path.join('.'),
+        message: isOwnWording(issue) ? issue.message : sayIssue(issue),
+      });
     }
     return undefined;
   };

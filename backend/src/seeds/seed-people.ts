@@ -65,7 +65,7 @@ async function seedPeople(
     name,
     email,
     bornOn: adultBornOn,
-    roles: roles as readonly Role[],
+    roles: roles,
     state: 'invited' as const,
   }));
   const crew = demoCrew.map(({ name, email, bornOn }) => ({

@@ -22,6 +22,7 @@ const HEIGHT_PX = 286;
 const NARROW_HEIGHT_PX = 226;
 const AXIS_PX = 34;
 const HALF_LOW_PX = 46;
+const LOW_LINE_PX = 17;
 
 /** The large water line of a day without a working window, for which no sand is laid bare. */
 export function DayWater(props: {
@@ -96,7 +97,7 @@ function Drawing(props: {
             Math.max(xOf(plot, low.at), HALF_LOW_PX * scale),
             plot.widthPx - HALF_LOW_PX * scale,
           )}
-          y={Math.min(yOf(plot, low.heightM) - 12 * scale, floorPx - 6)}
+          y={underTroughPx(plot, low, levels, scale)}
           textAnchor="middle"
         >
           <tspan className="font-semibold">{clockOfWater(low.at, facts.zone)}</tspan>{' '}
@@ -106,4 +107,19 @@ function Drawing(props: {
       <path className="stroke-edge" strokeWidth="1.25" d={`M0 ${floorPx}H${plot.widthPx}`} />
     </svg>
   );
+}
+
+/** Where the words of a low water stand: in the water under it, clear of the dashed lines. */
+function underTroughPx(
+  plot: Plot,
+  low: WaterPoint,
+  levels: readonly WaterLevel[],
+  scale: number,
+): number {
+  const linePx = LOW_LINE_PX * scale;
+  const troughPx = yOf(plot, low.heightM);
+  const isClear = (y: number): boolean =>
+    levels.every(({ heightM }) => Math.abs(yOf(plot, heightM) - (y - 4 * scale)) > linePx / 2 + 1);
+  const places = [1, 1.5, 2, 2.5, 3].map((lines) => troughPx + lines * linePx);
+  return places.find((y) => y < plot.basePx && isClear(y)) ?? troughPx + linePx;
 }

@@ -6,6 +6,9 @@ import type { HeroFacts, HeroLayout } from './hero-layout.ts';
 import { xOf, yOf } from './water-curve.ts';
 
 const STEP_M = 2;
+const HOUR_MS = 3_600_000;
+/** Under this width the words of two hours would touch. */
+const LEAST_APART_PX = 60;
 
 /** What the axes are drawn from: of a session's day, or of one without a session. */
 export type AxisFacts = Pick<HeroFacts, 'axis' | 'zone' | 'dayFromAt' | 'sunriseAt' | 'sunsetAt'>;
@@ -88,10 +91,12 @@ function nights(facts: AxisFacts, { plot }: AxisLayout): (readonly [number, numb
     .map(([fromAt, untilAt]) => [xOf(plot, fromAt), xOf(plot, untilAt)]);
 }
 
-/** The full hours to be named: every third of a whole day, every second of a part of it. */
+/** The full hours to be named: every third where there is room, else every second or sixth. */
 function hours(facts: AxisFacts, { plot, isNarrow }: AxisLayout): Instant[] {
   const day = dayAt(facts.dayFromAt, facts.zone);
-  const every = isNarrow ? 2 : 3;
+  const hourPx = (plot.widthPx * HOUR_MS) / (plot.untilAt - plot.fromAt);
+  const everyOnNarrow = hourPx * 2 < LEAST_APART_PX ? 6 : 2;
+  const every = isNarrow ? everyOnNarrow : 3;
   const clocks = Array.from({ length: 24 / every }, (_, step) => step * every);
   return clocks
     .map((hour) => instantOf(day, `${String(hour).padStart(2, '0')}:00` as ClockTime, facts.zone))

@@ -13,7 +13,7 @@ export function ProblemSummary({ title, children }: { title: string; children: R
       ref={ref}
       tabIndex={-1}
       role="alert"
-      className="mt-3 border-t-2 border-anemone py-2 text-ui"
+      className="mt-3 border-t-2 border-anemone py-2 text-ui max-wide:scroll-mb-20"
     >
       <p className="font-semibold">{title}</p>
       {children}

@@ -26,8 +26,8 @@ export function Tick(props: {
         </svg>
       </span>
       <span>
-        {props.words}
-        {props.spoken !== undefined && <span className="sr-only"> {props.spoken}</span>}
+        {props.words}{' '}
+        {props.spoken !== undefined && <span className="sr-only">{props.spoken}</span>}
       </span>
     </label>
   );

@@ -212,7 +212,7 @@ function UnplacedTimes({ facts, keys }: { facts: HeroFacts; keys: readonly HeroL
     'off-by': `off the shore by ${clock(facts.offByAt)}`,
     'clear-by': `lower shore clear by ${clock(facts.clearByAt)}`,
     'low-water': `low water ${clockOfWater(facts.lowWaterAt, facts.zone)}`,
-    'low-height': `${metres(facts.lowWaterHeightM)} m at low water`,
+    'low-height': `low water is ${metres(facts.lowWaterHeightM)} m`,
     starts: `on the shore ${clock(facts.startsAt)}`,
     'crew-meets': `crew meet ${clock(facts.crewMeetsAt)}`,
     'party-meets': `party meets ${clock(facts.partyMeetsAt)}`,

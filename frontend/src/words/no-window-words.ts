@@ -50,7 +50,7 @@ export function sayNoWindow(reason: NoWindowView, zone: string): string {
 const startWords: Record<Limit, ((clock: string) => string) | null> = {
   'low-water-time': null,
   'working-level': (clock) => `once the water is low enough at ${clock}`,
-  daylight: (clock) => `after dark until ${clock}`,
+  daylight: (clock) => `in the light from ${clock}`,
   hours: (clock) => `after ${clock}`,
   'cut-off-level': (clock) => `once the way off is clear at ${clock}`,
 };
@@ -58,7 +58,7 @@ const startWords: Record<Limit, ((clock: string) => string) | null> = {
 const offWords: Record<Limit, ((clock: string) => string) | null> = {
   'low-water-time': null,
   'working-level': (clock) => `before the water is too high at ${clock}`,
-  daylight: (clock) => `before dark at ${clock}`,
+  daylight: (clock) => `in the light to ${clock}`,
   hours: (clock) => `before ${clock}`,
   'cut-off-level': (clock) => `before ${clock}, when the cut-off level is near`,
 };

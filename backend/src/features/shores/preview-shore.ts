@@ -1,5 +1,5 @@
 import type { AppContext } from '#backend/app-context.ts';
-import { readShoreTide } from '#backend/features/tides/tides.reader.ts';
+import { readShoreRange, readShoreTide } from '#backend/features/tides/tides.reader.ts';
 import type { ShorePlace, ShoreTide } from '#backend/features/tides/tides.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
 import { usableDaysInYear, windowOn } from '#shared/domain/tides/shore-water.ts';
@@ -10,6 +10,7 @@ import { addDays, dayAt } from '#shared/kernel/time.ts';
 /** What settings that nobody has saved would mean. */
 export interface ShorePreview {
   readonly tide: ShoreTide;
+  readonly range: { readonly lowestTideM: number; readonly highestTideM: number };
   readonly on: CalendarDay;
   readonly usableDays: number;
 }
@@ -24,7 +25,8 @@ export async function previewShore(
   on: CalendarDay | null,
 ): Promise<ShorePreview> {
   const tide = await ctx.reading((read) => readShoreTide(ctx.tides, read, shore));
-  if (tide === null) {
+  const range = await readShoreRange(ctx.tides, shore);
+  if (tide === null || range === null) {
     throw new Problem('not-understood', 'There is no water to show', {
       fields: [
         { where: 'body', field: 'settings.tideStationId', message: 'This station cannot be used.' },
@@ -33,7 +35,7 @@ export async function previewShore(
   }
   const todayOn = dayAt(ctx.clock.now(), shore.zone);
   const usable = usableDaysInYear(shore, tide.curve, todayOn);
-  return { tide, on: on ?? usable[0] ?? todayOn, usableDays: usable.length };
+  return { tide, range, on: on ?? usable[0] ?? todayOn, usableDays: usable.length };
 }
 
 /** The first day from today on with a working window, within so many days; null for none. */

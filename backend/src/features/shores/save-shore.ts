@@ -1,3 +1,4 @@
+import { readShoreRange } from '#backend/features/tides/tides.reader.ts';
 import type { AppContext, Tx } from '#backend/app-context.ts';
 import { databaseError } from '#backend/database/transaction.ts';
 import { Problem } from '#backend/http/problem.ts';
@@ -92,7 +93,7 @@ function recordChange(
 }
 
 async function withRange(ctx: AppContext, wish: ShoreWish): Promise<ShoreValues> {
-  const range = await ctx.tides.rangeAt(wish.tideStationId);
+  const range = await readShoreRange(ctx.tides, wish);
   if (range === null) {
     throw new Problem('not-understood', 'The shore was not saved', {
       fields: [
@@ -104,12 +105,7 @@ async function withRange(ctx: AppContext, wish: ShoreWish): Promise<ShoreValues>
       ],
     });
   }
-  const { low, high } = wish.differences;
-  return {
-    ...wish,
-    lowestTideM: range.lowestM * low.heightFactor + low.higherM,
-    highestTideM: range.highestM * high.heightFactor + high.higherM,
-  };
+  return { ...wish, ...range };
 }
 
 async function refusingTakenName<Result>(work: () => Promise<Result>): Promise<Result> {

@@ -1,5 +1,9 @@
 import type { z } from 'zod';
-import { presentDayOfWater, presentSource } from '#backend/features/tides/tides.presenter.ts';
+import {
+  presentAxis,
+  presentDayOfWater,
+  presentSource,
+} from '#backend/features/tides/tides.presenter.ts';
 import type { ShoreTide, TableInForce } from '#backend/features/tides/tides.reader.ts';
 import type { StationNearby } from '#backend/platform/tides/tide-stations.ts';
 import type {
@@ -98,10 +102,10 @@ export function presentShores(
 
 export function presentPreview(
   rules: ShoreRules,
-  { tide, on, usableDays }: ShorePreview,
+  { tide, range, on, usableDays }: ShorePreview,
 ): z.input<typeof previewContract.reply> {
   return {
-    day: presentDayOfWater(rules, tide, null, on),
+    day: presentDayOfWater(rules, tide, presentAxis(range), on),
     source: presentSource(tide, startOfDay(on, rules.zone), startOfDay(addDays(on, 1), rules.zone)),
     usableDays,
   };

@@ -42,10 +42,10 @@ export function presentTablePreview(read: TableRead): TablePreview {
   };
 }
 
-function layoutWords({ layout, clock }: OfficialTable): string {
+function layoutWords({ layout }: OfficialTable): string {
   const said =
     layout.zoneSaid === null ? [] : [`the table itself names its zone ${layout.zoneSaid}`];
-  return [...layout.words, `${clock}-hour clock`, ...said].join('; ');
+  return [...layout.words, ...said].join('; ');
 }
 
 function presentClockChanges(

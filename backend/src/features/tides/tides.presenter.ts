@@ -63,7 +63,7 @@ const stripStepMinutes = 15;
 export function presentDayOfWater(
   rules: ShoreRules,
   { curve }: Pick<ShoreTide, 'curve'>,
-  axis: z.input<typeof waterAxis> | null,
+  axis: z.input<typeof waterAxis>,
   on: CalendarDay,
   window = windowOn(rules, curve, on),
 ): DayOfWater {
@@ -73,7 +73,7 @@ export function presentDayOfWater(
   const sun = sunOn(on, rules.latitude, rules.longitude, rules.zone);
   return {
     on,
-    axis: axis ?? axisOf(heights),
+    axis,
     curve: presentCurve(heights),
     extremes: curve.extremes(fromAt, toAt).map(presentExtreme),
     sunriseAt: sun.sunriseAt === null ? null : toIso(sun.sunriseAt),
@@ -81,13 +81,6 @@ export function presentDayOfWater(
     window: window.isGranted ? presentWindow(window.value) : null,
     reasons: window.isGranted ? [] : window.reasons.map(presentNoWindow),
   };
-}
-
-/** Where the range of 19 years is not known yet: the day's own, with room on either side. */
-function axisOf(heights: readonly TideHeight[]): z.input<typeof waterAxis> {
-  const all = heights.map(({ heightM }) => heightM);
-  const [lowestTideM, highestTideM] = [Math.min(...all), Math.max(...all)];
-  return presentAxis({ lowestTideM: Math.min(0, lowestTideM), highestTideM: highestTideM + 0.5 });
 }
 
 export function presentWindow(window: WorkingWindow): WorkingWindowView {

@@ -111,3 +111,20 @@ function withDifferences(
   const key = [tideStationId, ...tables.map(({ id }) => id), ...figures].join(' ');
   return tides.curve(key, () => Promise.resolve(curveWithDifferences(atStation, differences)));
 }
+
+/**
+ * The lowest and the highest astronomical tide at a shore, from which its drawings have their
+ * axis; null when its station cannot be used.
+ */
+export async function readShoreRange(
+  tides: Tides,
+  { tideStationId, differences }: ShorePlace,
+): Promise<{ readonly lowestTideM: number; readonly highestTideM: number } | null> {
+  const range = await tides.rangeAt(tideStationId);
+  if (range === null) return null;
+  const { low, high } = differences;
+  return {
+    lowestTideM: range.lowestM * low.heightFactor + low.higherM,
+    highestTideM: range.highestM * high.heightFactor + high.higherM,
+  };
+}

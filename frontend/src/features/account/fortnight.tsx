@@ -1,3 +1,4 @@
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { useMeasuredWidth } from '#frontend/components/use-measured-width.ts';
 import type { Plot, WaterPoint } from '#frontend/components/water-curve.ts';
 import {
@@ -11,7 +12,7 @@ import {
   yOf,
 } from '#frontend/components/water-curve.ts';
 import { textScale } from '#frontend/components/root-font.ts';
-import { clockOfWater, sourceInWords } from '#frontend/words/tide-words.ts';
+import { clockOfWater } from '#frontend/words/tide-words.ts';
 import { counted, listed } from '#frontend/words/number-words.ts';
 import type { CalendarDay, Instant } from '#shared/kernel/time.ts';
 import { dayAt, formatDay, fromIso } from '#shared/kernel/time.ts';
@@ -31,8 +32,8 @@ export function FortnightWater({ fortnight }: { fortnight: Fortnight }) {
   return (
     <figure ref={ref} className="mt-8 min-h-48">
       {widthPx !== null && widthPx > 0 && <Drawing fortnight={fortnight} widthPx={widthPx} />}
-      <figcaption className="bg-shallow px-4 pb-2 text-xs wide:px-page">
-        {`Tides ${sourceInWords(fortnight.source)}, heights above ${fortnight.source.datum}. ${fortnight.source.attribution} Predictions are predictions: the official tide table and the shore leader on the spot decide.`}
+      <figcaption className="bg-shallow px-4 pb-2 wide:px-page">
+        <TideCredit shown="The water" source={fortnight.source} />
       </figcaption>
     </figure>
   );

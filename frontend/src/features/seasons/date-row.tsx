@@ -87,36 +87,44 @@ function Unusual({ date, zone }: { date: PlanDate; zone: string }) {
   if (words === null) return null;
   return (
     <span
-      className={`text-xs leading-tight tabular-nums ${date.isByHand ? 'font-semibold text-wrack' : 'text-barnacle'}`}
+      className={`text-xs leading-tight tabular-nums max-wide:text-ui ${date.isByHand ? 'font-semibold text-wrack' : 'text-barnacle'}`}
     >
       {words}
     </span>
   );
 }
 
-/** One date down a narrow page: a strip with its times under it, or one line on why not. */
+/**
+ * One date down a narrow page: a strip with its times under it, or one line on why not. What can
+ * be done keeps its place, and with it the focus, when one becomes the other.
+ */
 export function NarrowRow(props: DateRowProps) {
+  const { date } = props;
   return (
-    <li className="border-t border-hair">
-      {props.date.isTaken ? <NarrowTaken {...props} /> : <NarrowSkipped {...props} />}
+    <li className="border-t border-hair py-1">
+      <div className="flex min-h-11 items-center justify-between gap-3">
+        {date.isTaken ? (
+          <h4 className="text-ui font-semibold">{formatDay(date.on, 'short')}</h4>
+        ) : (
+          <NarrowReason {...props} />
+        )}
+        {props.end}
+      </div>
+      {date.isTaken && <NarrowTimes {...props} />}
       {props.under}
     </li>
   );
 }
 
-function NarrowTaken(props: DateRowProps) {
+function NarrowTimes(props: DateRowProps) {
   const { date, zone } = props;
   const { window } = date.day;
   if (window === null) return null;
   const clock = (iso: string): string => clockAt(fromIso(iso), zone);
   return (
-    <div className="pt-1 pb-2.5 text-ui">
-      <div className="flex items-center justify-between gap-3">
-        <h4 className="font-semibold">{formatDay(date.on, 'short')}</h4>
-        {props.end}
-      </div>
+    <div className="pb-1.5 text-ui">
       <PlanStrip date={date} zone={zone} hours={props.hours} widthPx={props.widthPx} hasLimits />
-      <p className="mt-1 flex flex-wrap justify-between gap-x-2.5">
+      <p className="mt-1 flex flex-wrap items-baseline justify-between gap-x-2.5">
         <span className="tabular-nums">
           low <b>{clockOfWater(fromIso(window.lowWaterAt), zone)}</b>,{' '}
           {metres(window.lowWaterHeightM)} m
@@ -125,7 +133,7 @@ function NarrowTaken(props: DateRowProps) {
           off the shore by <b>{clock(window.offTheShoreBy)}</b>
         </span>
       </p>
-      <p className="mt-1 flex flex-wrap justify-between gap-x-2.5 text-barnacle">
+      <p className="mt-1 flex flex-wrap items-baseline justify-between gap-x-2.5 text-barnacle">
         <span className="tabular-nums">on the shore {clock(window.startsAt)}</span>
         <Unusual date={date} zone={zone} />
       </p>
@@ -133,18 +141,14 @@ function NarrowTaken(props: DateRowProps) {
   );
 }
 
-function NarrowSkipped(props: DateRowProps) {
-  const { date, zone } = props;
+function NarrowReason({ date, zone, hasWeekday }: DateRowProps) {
   return (
-    <div className="flex min-h-11 items-center justify-between gap-3 py-1 text-sm text-barnacle">
-      <p className="grid grid-cols-[4.75rem_1fr] tabular-nums">
-        <span>{props.hasWeekday ? formatDay(date.on, 'short') : shortDate(date.on)}</span>
-        <span>
-          <span className="sr-only">Skipped: </span>
-          {skippedInWords(date, zone)}
-        </span>
-      </p>
-      {props.end}
-    </div>
+    <p className="grid grid-cols-[5.25rem_1fr] text-sm text-barnacle tabular-nums">
+      <span>{hasWeekday ? formatDay(date.on, 'short') : shortDate(date.on)}</span>
+      <span>
+        <span className="sr-only">Skipped: </span>
+        {skippedInWords(date, zone)}
+      </span>
+    </p>
   );
 }

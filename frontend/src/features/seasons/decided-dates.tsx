@@ -1,5 +1,6 @@
 import { useRef, useState } from 'react';
 import { Button } from '#frontend/components/button.tsx';
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { shortDate } from '#frontend/words/day-words.ts';
 import type { PlanDate, PlanPreview } from '#shared/contracts/season-plans.ts';
 import type { CalendarDay } from '#shared/kernel/time.ts';
@@ -7,7 +8,6 @@ import { AddDate } from './add-date.tsx';
 import { DateList } from './date-list.tsx';
 import type { PlanException } from './plan-draft.ts';
 import { decided, decisionFor } from './plan-exceptions.ts';
-import { PlanTides } from './plan-tides.tsx';
 import { planHeadline } from './plan-words.ts';
 import { ReasonForm } from './reason-form.tsx';
 import type { StripHours } from './strip-hours.ts';
@@ -16,19 +16,17 @@ import type { StripHours } from './strip-hours.ts';
 export function DecidedDates(props: {
   readonly preview: PlanPreview;
   readonly hours: StripHours;
+  /** Whether the rules beside them have moved on to something that gives no dates. */
+  readonly isOutdated: boolean;
   readonly exceptions: readonly PlanException[];
   readonly onDecide: (exceptions: PlanException[]) => void;
 }) {
   const { preview, exceptions, onDecide } = props;
   const [openedOn, setOpenedOn] = useState<CalendarDay | null>(null);
-  const opener = useRef<Element | null>(null);
-  const open = (on: CalendarDay): void => {
-    opener.current = document.activeElement;
-    setOpenedOn(on);
-  };
+  const buttons = useRef(new Map<CalendarDay, HTMLButtonElement>());
   const close = (): void => {
+    if (openedOn !== null) buttons.current.get(openedOn)?.focus();
     setOpenedOn(null);
-    if (opener.current instanceof HTMLElement) opener.current.focus();
   };
   const decide = (on: CalendarDay, kind: PlanException['kind'] | null, reason: string): void => {
     onDecide(decided(exceptions, on, kind, reason));
@@ -39,11 +37,14 @@ export function DecidedDates(props: {
     if (decision === null) return null;
     return (
       <Button
+        ref={(node) => {
+          if (node === null) buttons.current.delete(date.on);
+          else buttons.current.set(date.on, node);
+        }}
         look="plain"
-        onPress={() => (decision.kind === null ? decide(date.on, null, '') : open(date.on))}
+        onPress={() => (decision.kind === null ? decide(date.on, null, '') : setOpenedOn(date.on))}
       >
-        {decision.word}
-        <span className="sr-only"> {shortDate(date.on)}</span>
+        {decision.word} <span className="sr-only">{shortDate(date.on)}</span>
       </Button>
     );
   };
@@ -68,6 +69,11 @@ export function DecidedDates(props: {
         Each strip is one day’s water. Dark ends are hours without daylight; dashed lines are your
         earliest and latest.
       </p>
+      {props.isOutdated && (
+        <p className="text-sm font-medium text-wrack">
+          These are the dates from before: what is marked in the rules gives none.
+        </p>
+      )}
       <DateList
         preview={preview}
         hours={props.hours}
@@ -78,7 +84,9 @@ export function DecidedDates(props: {
       <div className="mt-2">
         <AddDate dates={preview.dates} onAdd={(on, reason) => decide(on, 'add', reason)} />
       </div>
-      <PlanTides source={preview.source} />
+      <div className="mt-4">
+        <TideCredit shown="The water of these days" source={preview.source} />
+      </div>
     </section>
   );
 }

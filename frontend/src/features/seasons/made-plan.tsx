@@ -4,6 +4,7 @@ import { sayProblem } from '#frontend/api/say-problem.ts';
 import { Button } from '#frontend/components/button.tsx';
 import { PageHeading, PageTitle } from '#frontend/components/page-heading.tsx';
 import { ProblemSummary } from '#frontend/components/problem-summary.tsx';
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { Tick } from '#frontend/components/tick.tsx';
 import { shortDate } from '#frontend/words/day-words.ts';
 import { counted, numberWord, sentenceCase } from '#frontend/words/number-words.ts';
@@ -11,8 +12,7 @@ import type { PlanDate, PlanView } from '#shared/contracts/season-plans.ts';
 import { DateList } from './date-list.tsx';
 import { PlanFrame } from './plan-frame.tsx';
 import { PlanSummary } from './plan-summary.tsx';
-import { PlanTides } from './plan-tides.tsx';
-import { planHeadline } from './plan-words.ts';
+import { planHeadline, publishedInWords } from './plan-words.ts';
 import type { PlansView } from './seasons.queries.ts';
 import { stripHours } from './strip-hours.ts';
 import { usePublishSessions } from './use-save-plan.ts';
@@ -52,7 +52,7 @@ export function MadePlan(props: {
           <PageTitle>{settings.name}</PageTitle>
           <PageHeading>{settings.name}</PageHeading>
           <p className="text-sm text-barnacle">
-            {`${sentenceCase(counted(plan.made, 'session'))} made, ${numberWord(plan.published)} published.`}
+            {`${sentenceCase(counted(plan.made, 'session'))} made, ${publishedInWords(plan.published)}.`}
           </p>
           {publish.error !== null && (
             <ProblemSummary title="Nothing was published.">
@@ -88,7 +88,9 @@ export function MadePlan(props: {
             )}
             underOf={() => null}
           />
-          <PlanTides source={preview.source} />
+          <div className="mt-4">
+            <TideCredit shown="The water of these days" source={preview.source} />
+          </div>
         </section>
       }
       foot={buttons === false ? null : <div className="grid gap-2.5">{buttons}</div>}
@@ -140,9 +142,11 @@ function SessionOfDate(props: {
   if (sessionId === null || sessionState === null) return null;
   return (
     <span className="flex items-center justify-end gap-3.5">
-      <Link className="text-sm" to={props.addressOfSession(sessionId)}>
-        {stateWords[sessionState]}
-        <span className="sr-only"> session of {shortDate(date.on)}</span>
+      <Link
+        className="inline-flex min-h-7 items-center text-sm max-wide:min-h-target"
+        to={props.addressOfSession(sessionId)}
+      >
+        {stateWords[sessionState]} <span className="sr-only">session of {shortDate(date.on)}</span>
       </Link>
       {draftOfDate(date).length > 0 && (
         <Tick

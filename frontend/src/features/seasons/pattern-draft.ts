@@ -43,7 +43,7 @@ export function patternDraft(text: string): PatternDraft {
     case 'monthly-by-day':
       return { ...draft, monthDays: pattern.days.map(dayWord).join(', ') };
     case 'rule':
-      return { ...draft, rule: pattern.text };
+      return draft;
   }
 }
 

@@ -5,7 +5,7 @@ import { Button } from '#frontend/components/button.tsx';
 import { LoadingWash } from '#frontend/components/loading-wash.tsx';
 import { PageHeading, PageTitle } from '#frontend/components/page-heading.tsx';
 import { ProblemSummary } from '#frontend/components/problem-summary.tsx';
-import { counted, listed } from '#frontend/words/number-words.ts';
+import { counted } from '#frontend/words/number-words.ts';
 import type { PlanSettings, PlanView } from '#shared/contracts/season-plans.ts';
 import { isClockTime } from '#shared/kernel/time.ts';
 import { DecidedDates } from './decided-dates.tsx';
@@ -36,6 +36,7 @@ export function PlanEditor(props: {
   const [kept, setKept] = useState({ draft: start, plan: props.saved });
   const [isOpen, setIsOpen] = useState(props.saved === null);
   const [hasTried, setHasTried] = useState(false);
+  const [isStopped, setIsStopped] = useState(false);
   const isChanged = kept.plan === null || draft !== kept.draft;
   const seen = usePlanPreview(draft, kept.plan, isChanged);
   const reading = readDraft(draft);
@@ -66,7 +67,10 @@ export function PlanEditor(props: {
     keep.reset();
     make.reset();
     if (reading.settings !== null) go(reading.settings);
-    else setIsOpen(true);
+    else {
+      setIsOpen(true);
+      setIsStopped(true);
+    }
   };
   const planId = kept.plan?.id ?? null;
   const onKeep = (): void => attempt((settings) => keep.mutate({ planId, settings }));
@@ -74,14 +78,15 @@ export function PlanEditor(props: {
     attempt((settings) => make.mutate({ planId, settings: isChanged ? settings : null }));
   const change = (changed: PlanDraft): void => {
     setDraft(changed);
+    setIsStopped(false);
     keep.reset();
     make.reset();
   };
 
   const count = seen.preview === null ? 0 : countDates(seen.preview.dates).sessions;
   const makeButton = <MakeButton count={count} isBusy={isBusy} onPress={onMake} />;
+  const isOutdated = Object.keys(errors).some((field) => field !== 'name');
   const name = draft.name.trim() === '' ? 'A new season plan' : draft.name;
-  const hasWrong = hasTried && reading.settings === null;
   return (
     <PlanFrame
       rules={(isRoomy) => (
@@ -95,13 +100,9 @@ export function PlanEditor(props: {
           <p className="text-sm text-barnacle" aria-live="polite">
             {`Season plan, ${kept.plan === null ? 'not saved yet' : isChanged ? 'changed, not saved yet' : 'draft'}. Nothing is on the calendar yet.`}
           </p>
-          {hasWrong && (
+          {isStopped && (
             <ProblemSummary title="The plan cannot be used as it is.">
-              <p>
-                {listed(Object.values(reading.errors))
-                  .replace(/\.,/g, ',')
-                  .replace('. and', ' and')}
-              </p>
+              <p>What is wrong is marked below.</p>
             </ProblemSummary>
           )}
           {refusal !== null && (
@@ -121,7 +122,7 @@ export function PlanEditor(props: {
           ) : (
             <PlanForm draft={draft} errors={errors} view={view} onChange={change} />
           )}
-          <div className="mt-5 grid gap-2.5">
+          <div className="mt-5 grid gap-2.5 empty:hidden">
             {isRoomy && makeButton}
             {(isRoomy || isOpen || isChanged) && (
               <Button look="line" isBusy={isBusy} onPress={onKeep}>
@@ -154,6 +155,7 @@ export function PlanEditor(props: {
             <DecidedDates
               preview={seen.preview}
               hours={hoursOf(draft, view)}
+              isOutdated={isOutdated}
               exceptions={draft.exceptions}
               onDecide={(exceptions) => change({ ...draft, exceptions })}
             />

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
-import { counted, numberWord, sentenceCase } from '#frontend/words/number-words.ts';
-import { spanInWords } from './plan-words.ts';
+import { counted, sentenceCase } from '#frontend/words/number-words.ts';
+import { publishedInWords, spanInWords } from './plan-words.ts';
 import type { PlansView } from './seasons.queries.ts';
 
 /** Every plan with its shore, its pattern and what has been made of it. */
@@ -39,5 +39,5 @@ export function PlanList({ view }: { view: PlansView }) {
 
 function stateInWords({ made, published }: PlansView['plans'][number]): string {
   if (made === 0) return 'Draft, nothing is on the calendar yet';
-  return sentenceCase(`${counted(made, 'session')}, ${numberWord(published)} published`);
+  return sentenceCase(`${counted(made, 'session')}, ${publishedInWords(published)}`);
 }

@@ -3,6 +3,7 @@ import { sayNoWindow } from '#frontend/words/no-window-words.ts';
 import type { PlanDate, PlanPreview, PlanSettings } from '#shared/contracts/season-plans.ts';
 import type { CalendarDay, Instant } from '#shared/kernel/time.ts';
 import { clockAt, formatDay, fromIso, instantOf, yearOf } from '#shared/kernel/time.ts';
+import { numberWord } from '#frontend/words/number-words.ts';
 import { metres } from '#frontend/words/tide-words.ts';
 
 const ONE_WEEKDAY = /^Every (?<weekday>(?:Mon|Tues|Wednes|Thurs|Fri|Satur|Sun)day)$/;
@@ -68,7 +69,7 @@ function tellingReason({ day }: PlanDate, zone: string): string {
   const noonAt = instantOf(day.on, '12:00', zone);
   const lows = [...new Set(day.reasons.map(lowWaterOf))].sort((a, b) => {
     const against = (at: Instant | null): number =>
-      day.reasons.filter((one) => lowWaterOf(one) === at && isByTheClock(one)).length;
+      day.reasons.filter((one) => lowWaterOf(one) === at).length;
     const away = (at: Instant | null): number => (at === null ? 0 : Math.abs(at - noonAt));
     return against(a) - against(b) || away(a) - away(b);
   });
@@ -82,10 +83,6 @@ function tellingReason({ day }: PlanDate, zone: string): string {
 
 function lowWaterOf(reason: Reason): Instant | null {
   return reason.why === 'no-low-water' ? null : fromIso(reason.lowWaterAt);
-}
-
-function isByTheClock({ why }: Reason): boolean {
-  return why === 'dark' || why === 'out-of-hours';
 }
 
 /** What of a taken date is not as usual: 'cut at 07:00, 2:15 left', 'by hand, 1:16 left'. */
@@ -139,6 +136,11 @@ export function stripInWords({ day, isTaken }: PlanDate, zone: string): string {
   if (!isTaken || window === null) return `${name}, skipped`;
   const clock = (iso: string): string => clockAt(fromIso(iso), zone);
   return `${name}: on the shore ${clock(window.startsAt)}, lower shore clear by ${clock(window.lowerShoreClearBy)}, off the shore by ${clock(window.offTheShoreBy)}`;
+}
+
+/** How many sessions of a plan are published: 'none published', 'two published'. */
+export function publishedInWords(published: number): string {
+  return `${published === 0 ? 'none' : numberWord(published)} published`;
 }
 
 /** The span of a plan: '5 June to 23 October', with years where they differ. */

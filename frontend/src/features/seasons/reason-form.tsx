@@ -18,7 +18,7 @@ export function ReasonForm(props: {
     <form
       ref={ref}
       noValidate
-      className="flex flex-wrap items-end gap-3 bg-wash px-3 pt-2 pb-3"
+      className="relative z-20 flex flex-wrap items-end gap-3 bg-wash px-3 pt-2 pb-3"
       onSubmit={(event) => {
         event.preventDefault();
         props.onConfirm(reason);

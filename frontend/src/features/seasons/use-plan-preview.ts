@@ -27,9 +27,13 @@ export function usePlanPreview(
   saved: PlanView | null,
   isChanged: boolean,
 ): SeenPlan {
-  const settings = useMemo(() => readDraft({ ...draft, name: ANY_NAME }).settings, [draft]);
+  const isOpen = saved === null || isChanged;
+  const settings = useMemo(
+    () => (isOpen ? readDraft({ ...draft, name: ANY_NAME }).settings : null),
+    [draft, isOpen],
+  );
   const settled = useSettled(settings, QUIET_MS);
-  const isAsked = settled !== null && (saved === null || isChanged);
+  const isAsked = settled !== null && isOpen;
   const query = useQuery({
     ...seasonsQueries.preview(settled ?? ({} as PlanSettings)),
     enabled: isAsked,

@@ -1,3 +1,4 @@
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { Limpet } from '#frontend/components/limpet.tsx';
@@ -5,7 +6,7 @@ import type { LimpetLook } from '#frontend/components/limpet.tsx';
 import { useMeasuredWidth } from '#frontend/components/use-measured-width.ts';
 import { readCurve } from '#frontend/components/water-curve.ts';
 import { WaterLine } from '#frontend/components/water-line.tsx';
-import { clockOfWater, metres, sourceInWords } from '#frontend/words/tide-words.ts';
+import { clockOfWater, metres } from '#frontend/words/tide-words.ts';
 import { sentenceCase } from '#frontend/words/number-words.ts';
 import type { CalendarSession, CalendarView } from '#shared/contracts/sessions.ts';
 import { addDays, clockAt, formatDay, fromIso, startOfDay, zoneName } from '#shared/kernel/time.ts';
@@ -195,8 +196,8 @@ export function TideCaution({ view }: { view: CalendarView }) {
   if (view.homeShore === null) return <p className="mt-2">No tide data covers these days.</p>;
   const { name, source } = view.homeShore;
   return (
-    <p className="mt-2">
-      {`The water at ${name}, ${sourceInWords(source)}, heights above ${source.datum}. ${source.attribution} The official tide table and the shore leader on the spot decide.`}
-    </p>
+    <div className="mt-2">
+      <TideCredit shown={`The water at ${name}`} source={source} />
+    </div>
   );
 }

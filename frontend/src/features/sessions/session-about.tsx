@@ -1,6 +1,5 @@
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { sentenceCase } from '#frontend/words/number-words.ts';
-import { positionInWords } from '#frontend/words/position-words.ts';
-import { sourceInWords, tideCaution } from '#frontend/words/tide-words.ts';
 import { shortDate } from '#frontend/words/day-words.ts';
 import type { SessionView } from '#shared/contracts/sessions.ts';
 import { clockAt, dayAt, fromIso, zoneName } from '#shared/kernel/time.ts';
@@ -61,17 +60,12 @@ function TimeToKeep(props: {
 
 function Caution({ session }: { session: SessionView }) {
   if (session.water === null) return null;
-  const { source } = session.water;
-  const at = positionInWords(source);
   return (
-    <section aria-labelledby="predictions" className="mt-5.5 text-sm">
+    <section aria-labelledby="predictions" className="mt-5.5">
       <h2 id="predictions" className="mb-1.5">
         About the tides
       </h2>
-      <p>{tideCaution}</p>
-      <p className="mt-1 text-barnacle">
-        {`Tide station ${source.stationName}, ${at}${source.table === null ? '' : `, ${sourceInWords(source)}`}. Heights in metres above ${source.datum}. ${source.attribution}`}
-      </p>
+      <TideCredit shown="The water of this day" source={session.water.source} />
     </section>
   );
 }

@@ -1,7 +1,8 @@
 import type { ReactNode } from 'react';
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { counted, listed } from '#frontend/words/number-words.ts';
 import { positionInWords } from '#frontend/words/position-words.ts';
-import { metres, sourceInWords, tideCaution } from '#frontend/words/tide-words.ts';
+import { metres } from '#frontend/words/tide-words.ts';
 import type { ShoreView } from '#shared/contracts/shores.ts';
 import { ratioWords } from './ratio-words.ts';
 
@@ -50,14 +51,11 @@ export function ShoreFacts({ shore }: { shore: ShoreView }) {
         <Fact name="Low water">{differenceInWords(settings.differences.low)}</Fact>
       </Facts>
       {source !== null && (
-        <section aria-labelledby="about-the-tides" className="text-sm">
-          <h2 id="about-the-tides" className="mb-1.5">
+        <section aria-labelledby="about-the-tides">
+          <h2 id="about-the-tides" className="mb-1.5 border-t-[1.5px] border-ink pt-2">
             About the tides
           </h2>
-          <p>{tideCaution}</p>
-          <p className="mt-1 text-barnacle">
-            {`Heights ${sourceInWords(source)}, in metres above ${source.datum}. ${source.attribution}`}
-          </p>
+          <TideCredit shown="The water of this shore" source={source} />
         </section>
       )}
     </div>

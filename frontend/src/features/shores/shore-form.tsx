@@ -52,7 +52,7 @@ export function ShoreForm(props: {
         <PlaceSection writing={writing} stations={preview.stations} />
         <DifferencesSection writing={writing} />
         {!isWide && (
-          <details className="mt-4 border-y-[1.5px] border-ink py-1.5">
+          <details className="mt-4 border-t-[1.5px] border-ink pt-1.5">
             <summary className="min-h-target cursor-pointer py-2 text-ui font-semibold tabular-nums">
               {waterInOneLine(preview)}
             </summary>

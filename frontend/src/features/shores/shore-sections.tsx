@@ -29,7 +29,7 @@ function at({ draft, errors, onWrite }: Writing, path: DraftPath) {
 }
 
 function Pair({ children }: { children: ReactNode }) {
-  return <div className="grid grid-cols-2 items-end gap-3">{children}</div>;
+  return <div className="grid grid-cols-2 items-start gap-3">{children}</div>;
 }
 
 function Words({ children }: { children: ReactNode }) {

@@ -2,10 +2,9 @@ import { ProblemError } from '#frontend/api/problem-error.ts';
 import { sayProblem } from '#frontend/api/say-problem.ts';
 import { Button } from '#frontend/components/button.tsx';
 import { LoadingWash } from '#frontend/components/loading-wash.tsx';
+import { TideCredit } from '#frontend/components/tide-credit.tsx';
 import { useWideScreen } from '#frontend/components/use-wide-screen.ts';
-import { positionInWords } from '#frontend/words/position-words.ts';
 import { counted, sentenceCase } from '#frontend/words/number-words.ts';
-import { sourceInWords, tideCaution } from '#frontend/words/tide-words.ts';
 import type { Reply } from '#frontend/api/call.ts';
 import type { DayOfWater } from '#shared/contracts/shores.ts';
 import { clockAt, formatDay, fromIso, startOfDay, zoneName } from '#shared/kernel/time.ts';
@@ -46,7 +45,11 @@ export function ShoreWaterPanel(props: {
       <p role="status" className="mt-3 text-ui">
         {data !== undefined && !isPlaceholderData && <b>{usableInWords(data.usableDays)}</b>}
       </p>
-      {data !== undefined && <AboutTheTides source={data.source} />}
+      {data !== undefined && (
+        <div className="mt-3 border-t border-hair pt-2">
+          <TideCredit shown="The water drawn here" source={data.source} />
+        </div>
+      )}
     </section>
   );
 }
@@ -133,18 +136,4 @@ function whyNot(error: Error): string {
   return isAboutFields
     ? 'The water cannot be drawn with these settings. What is wrong stands beside its field.'
     : sayProblem(error);
-}
-
-function AboutTheTides({ source }: { source: Reply<'previewShore'>['source'] }) {
-  return (
-    <details className="mt-3 border-t border-hair pt-2 text-sm">
-      <summary className="min-h-7 cursor-pointer font-medium text-deep max-wide:min-h-target">
-        About the tides
-      </summary>
-      <p className="mt-1">{tideCaution}</p>
-      <p className="mt-1 text-barnacle">
-        {`Tides ${sourceInWords(source)}, ${positionInWords(source)}. Heights in metres above ${source.datum}. ${source.attribution}`}
-      </p>
-    </details>
-  );
 }

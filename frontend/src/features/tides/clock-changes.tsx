@@ -9,6 +9,8 @@ type Day = TablePreview['clockChanges'][number];
  * held against the printed page: a table read in the wrong zone is an hour off on one side.
  */
 export function ClockChanges({ days, zone }: { days: readonly Day[]; zone: string }) {
+  const runs = runsOf(days).filter((run) => run.some(({ events }) => events.length > 0));
+  if (runs.length === 0) return null;
   return (
     <section aria-labelledby="clock-changes" className="mt-5">
       <h4 id="clock-changes" className="font-semibold">
@@ -17,7 +19,7 @@ export function ClockChanges({ days, zone }: { days: readonly Day[]; zone: strin
       <p className="text-ui">
         {`The clocks change round them. Times as the page should show them, in ${zoneInWords(zone)}.`}
       </p>
-      {runsOf(days).map((run) => (
+      {runs.map((run) => (
         <div
           key={run[0]?.on}
           className="mt-2 grid gap-x-10 gap-y-3 border-t border-hair pt-2 wide:grid-cols-3"
@@ -37,7 +39,10 @@ function PrintedDay({ day, zone }: { day: Day; zone: string }) {
       <caption className="text-left">
         <b>{formatDay(day.on, 'short')}</b>{' '}
         <span className="text-sm text-barnacle">
-          {`${day.zoneName}${day.isChangeDay ? ', the clocks change' : ''}`}
+          {[
+            ...(day.zoneName === '' ? [] : [day.zoneName]),
+            ...(day.isChangeDay ? ['the clocks change'] : []),
+          ].join(', ')}
         </span>
       </caption>
       <thead className="sr-only">

@@ -73,29 +73,32 @@ function MovedSession(props: {
   const day = formatDay(dayAt(fromIso(session.fromLowWaterAt), zone), 'short');
   const clock = (iso: string): string => clockAt(fromIso(iso), zone);
   return (
-    <li className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1 border-hair py-2 [li+&]:border-t">
+    <li className="flex items-start gap-x-6 gap-y-1 border-hair py-2 max-wide:flex-col-reverse [li+&]:border-t">
+      <div className="wide:w-24 wide:flex-none">
+        {newStartsAt !== null && (
+          <Tick
+            words="Move it"
+            spoken={`to the new times: ${shoreName}, ${day}`}
+            isTicked={isTicked}
+            onChange={onTick}
+          />
+        )}
+      </div>
       <div className="min-w-0 text-ui tabular-nums">
         <p>
           <b>{`${shoreName}, ${day}`}</b>
           {`, ${title}`}
         </p>
         <p>{moveInWords(session)}</p>
+        {newStartsAt === null && (
+          <p className="font-medium text-wrack">No working window is left: it keeps its times.</p>
+        )}
         {newStartsAt !== null && newOffTheShoreBy !== null && (
           <p className="text-barnacle">
             {`New times: on the shore ${clock(newStartsAt)}, off the shore by ${clock(newOffTheShoreBy)}`}
           </p>
         )}
       </div>
-      {newStartsAt === null ? (
-        <p className="text-ui font-medium text-wrack">No working window is left: it stays</p>
-      ) : (
-        <Tick
-          words="Move it"
-          spoken={`to the new times: ${shoreName}, ${day}`}
-          isTicked={isTicked}
-          onChange={onTick}
-        />
-      )}
     </li>
   );
 }

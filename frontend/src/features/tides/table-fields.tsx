@@ -30,7 +30,7 @@ export function TableFields(props: {
   const station = stations.find(({ id }) => id === draft.stationId);
   return (
     <div className="mt-3 grid max-w-letter gap-4">
-      <div className="grid gap-4 wide:grid-cols-2">
+      <div className="grid gap-4">
         <ChoiceField
           label="Tide station"
           value={draft.stationId}
@@ -78,7 +78,7 @@ export function TableFields(props: {
           />
         </div>
       )}
-      <div className="grid items-end gap-4 wide:grid-cols-3">
+      <div className="grid items-start gap-4 wide:grid-cols-3">
         <ChoiceField
           label="Heights in"
           value={draft.units}

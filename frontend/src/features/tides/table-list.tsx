@@ -99,7 +99,9 @@ function TakeBack({ table, onTakenBack }: { table: Table; onTakenBack: () => voi
   return (
     <div className="max-wide:w-full">
       <Button look="line" isWideOnPhone onPress={() => setIsAsking(true)}>
-        Take back<span className="sr-only"> {table.name}</span>
+        <span>
+          Take back <span className="sr-only">{table.name}</span>
+        </span>
       </Button>
       {isAsking && (
         <Suspense fallback={null}>

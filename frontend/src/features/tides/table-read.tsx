@@ -55,9 +55,7 @@ export function TableRead(props: {
       )}
       {problems > 0 && <Problems problems={preview.problems} />}
       {preview.comparison !== null && <TableComparison comparison={preview.comparison} />}
-      {preview.clockChanges.length > 0 && (
-        <ClockChanges days={preview.clockChanges} zone={table.zone} />
-      )}
+      <ClockChanges days={preview.clockChanges} zone={table.zone} />
       {preview.refusal === null && (
         <MovedSessions sessions={preview.movedSessions} ticked={moves} onTick={setMoves} />
       )}
@@ -112,7 +110,7 @@ function whyNotYet(
 }
 
 function movesInWords(count: number): string {
-  if (count === 0) return 'Sessions that are made keep their times.';
+  if (count === 0) return 'No session is ticked to move: all keep their times.';
   return count === 1
     ? 'One session takes the new times; its crew find them on the calendar.'
     : `The ${numberWord(count)} sessions ticked take the new times; their crews find them on the calendar.`;
@@ -143,7 +141,7 @@ function Problems({ problems }: { problems: TablePreview['problems'] }) {
       <h4 id="table-problems" className="font-semibold text-wrack">
         {problems.length === 1 ? 'One row is not right' : `${problems.length} rows are not right`}
       </h4>
-      <ul className="mt-1 max-h-96 overflow-y-auto text-ui">
+      <ul className="mt-1 gap-x-10 text-ui wide:columns-2">
         {shown.map(({ row, message }) => (
           <li key={`${row} ${message}`} className="grid grid-cols-[5rem_minmax(0,1fr)] py-0.5">
             <span className="text-barnacle tabular-nums">Row {row}</span>

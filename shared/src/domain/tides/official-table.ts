@@ -143,7 +143,11 @@ function layoutWords(
     `separated by ${lines.separator}`,
     ...(lines.above.length === 0
       ? []
-      : [`${lines.above.length} lines above the table passed over`]),
+      : [
+          lines.above.length === 1
+            ? 'one line above the table passed over'
+            : `${lines.above.length} lines above the table passed over`,
+        ]),
   ];
 }
 
