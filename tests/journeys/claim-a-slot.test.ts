@@ -1,15 +1,14 @@
 import { AxeBuilder } from '@axe-core/playwright';
-import type { Browser, BrowserContext, Page } from 'playwright-core';
+import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { launchBrowser } from '../support/browser.ts';
 import { eventually } from '../support/eventually.ts';
+import { signInAs, visit } from '../support/visitor.ts';
 import { startWholeSystem } from '../support/whole-system.ts';
 import type { WholeSystem } from '../support/whole-system.ts';
 
 let system: WholeSystem;
 let browser: Browser;
-/** What the console of any page said that it should not have. */
-const complaints: string[] = [];
 
 beforeAll(async () => {
   system = await startWholeSystem();
@@ -20,22 +19,8 @@ afterAll(async () => {
   await system.close();
 });
 
-async function visit(width = 1360, height = 900): Promise<{ context: BrowserContext; page: Page }> {
-  const context = await browser.newContext({ viewport: { width, height }, locale: 'en-GB' });
-  const page = await context.newPage();
-  page.on('pageerror', (error) => complaints.push(String(error)));
-  page.on('console', (message) => {
-    if (message.type() === 'error') complaints.push(`${page.url()}: ${message.text()}`);
-  });
-  return { context, page };
-}
-
-async function signInAs(page: Page, name: string): Promise<void> {
-  await page.goto(system.baseUrl);
-  await page.getByRole('link', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => url.origin === system.issuer);
-  await page.getByRole('button', { name: new RegExp(name) }).click();
-}
+const visitor = (size?: readonly [number, number], complaints: string[] = []) =>
+  visit(browser, complaints, size);
 
 /** The pages of the sessions that lie ahead, in their order. */
 async function sessionPages(page: Page): Promise<string[]> {
@@ -50,8 +35,8 @@ async function sessionPages(page: Page): Promise<string[]> {
 
 describe('a volunteer', () => {
   it('signs in, is refused one leader slot in words, claims another, gets the letter; a coordinator sees it', async () => {
-    const { context, page } = await visit();
-    await signInAs(page, 'Callum Marrack');
+    const { context, page } = await visitor();
+    await signInAs(page, system, 'Callum Marrack');
     await page.getByRole('heading', { level: 1, name: /\d{4}/ }).waitFor();
     const pages = await sessionPages(page);
 
@@ -78,8 +63,8 @@ describe('a volunteer', () => {
     expect(letters).toHaveLength(1);
     expect(letters[0]).toContain('Yours: shore leader');
 
-    const coordinator = await visit();
-    await signInAs(coordinator.page, 'Ines Thackeray');
+    const coordinator = await visitor();
+    await signInAs(coordinator.page, system, 'Ines Thackeray');
     await coordinator.page.getByRole('heading', { level: 1, name: /\d{4}/ }).waitFor();
     await coordinator.page.goto(system.baseUrl + (pages[1] ?? ''));
     const seen = coordinator.page.getByRole('listitem').filter({ hasText: 'Shore leader' }).first();
@@ -89,8 +74,8 @@ describe('a volunteer', () => {
   });
 
   it('releases the slot again, after being asked', async () => {
-    const { context, page } = await visit(390, 844);
-    await signInAs(page, 'Callum Marrack');
+    const { context, page } = await visitor([390, 844]);
+    await signInAs(page, system, 'Callum Marrack');
     await page.getByRole('heading', { level: 1 }).waitFor();
     const pages = await sessionPages(page);
     await page.goto(system.baseUrl + (pages[1] ?? ''));
@@ -105,8 +90,8 @@ describe('a volunteer', () => {
   });
 
   it('ends both sessions by signing out: ours, and the one at the provider', async () => {
-    const { context, page } = await visit();
-    await signInAs(page, 'Callum Marrack');
+    const { context, page } = await visitor();
+    await signInAs(page, system, 'Callum Marrack');
     await page.getByRole('heading', { level: 1, name: /\d{4}/ }).waitFor();
     const atProvider = async () =>
       (await context.cookies(system.issuer)).filter(({ name }) => name === 'ebbfolk_stand_in');
@@ -128,8 +113,8 @@ describe('somebody else', () => {
     ['Rafe Penhallow', 'not-invited'],
     ['Oona Birdsall', 'email-not-verified'],
   ])('%s is told why they are not let in (%s) and what to do', async (name, why) => {
-    const { context, page } = await visit();
-    await signInAs(page, name);
+    const { context, page } = await visitor();
+    await signInAs(page, system, name);
     await page.waitForURL(`${system.baseUrl}/sign-in/refused?why=${why}`);
     await page.getByRole('heading', { level: 1 }).waitFor();
     const { person } = await page.evaluate(async () => {
@@ -141,7 +126,7 @@ describe('somebody else', () => {
   });
 
   it('who goes back from the provider without signing in can try again', async () => {
-    const { context, page } = await visit();
+    const { context, page } = await visitor();
     await page.goto(system.baseUrl);
     await page.getByRole('link', { name: 'Sign in' }).click();
     await page.waitForURL((url) => url.origin === system.issuer);
@@ -158,7 +143,9 @@ describe('every screen', () => {
   ])(
     'at %d px has no fault that axe can find, does not scroll sideways, and says nothing in the console',
     async (width, height) => {
-      const { context, page } = await visit(width, height);
+      /** What the console of any page said that it should not have. */
+      const complaints: string[] = [];
+      const { context, page } = await visitor([width, height], complaints);
       const findings: string[] = [];
       const look = async (where: string): Promise<void> => {
         const { violations } = await new AxeBuilder({ page }).analyze();
@@ -177,7 +164,7 @@ describe('every screen', () => {
       await page.goto(`${system.baseUrl}/sign-in/refused?why=not-invited`);
       await page.getByRole('heading', { level: 1 }).waitFor();
       await look('refused');
-      await signInAs(page, 'Callum Marrack');
+      await signInAs(page, system, 'Callum Marrack');
       await page.getByRole('heading', { level: 1 }).waitFor();
       await page.waitForLoadState('networkidle');
       await look('calendar');
