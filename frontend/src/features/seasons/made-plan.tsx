@@ -62,7 +62,7 @@ export function MadePlan(props: {
           <PlanSummary settings={settings} preview={preview} view={view} />
           <p className="mt-2 text-sm">
             Sessions are made of this plan, and people may hold their slots: its rules stay as they
-            are. A session can still be changed by itself.
+            are.
           </p>
           {isRoomy && buttons !== false && <div className="mt-5 grid gap-2.5">{buttons}</div>}
         </>
