@@ -1,11 +1,12 @@
 import { readFileSync } from 'node:fs';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { recurrenceDays, recurrenceTimes } from '#shared/kernel/recurrence-dates.ts';
+import { beforeAll, expect, it } from 'vitest';
+import type * as RecurrenceDates from '#shared/kernel/recurrence-dates.ts';
 import type { Recurrence } from '#shared/kernel/recurrence-dates.ts';
 import { readRule } from '#shared/kernel/recurrence-rule.ts';
 import type { Verdict } from '#shared/kernel/result.ts';
 import { addDays, toIso } from '#shared/kernel/time.ts';
 import type { CalendarDay, ClockTime } from '#shared/kernel/time.ts';
+import { describeInEachProcessZone } from '../support/process-zones.ts';
 
 interface Example {
   readonly id: string;
@@ -29,26 +30,11 @@ it('has all the examples', () => {
   expect(examples).toHaveLength(25);
 });
 
-// Minutes as Date.getTimezoneOffset gives them: behind UTC positive.
-describe.each([
-  ['UTC', 0, 0],
-  ['Europe/London', 0, -60],
-  ['America/Los_Angeles', 480, 420],
-])('on a machine whose own zone is %s', (processZone, januaryOffset, julyOffset) => {
-  const zoneBefore = process.env['TZ'];
+let dates: typeof RecurrenceDates;
 
-  beforeAll(() => {
-    process.env['TZ'] = processZone;
-  });
-
-  afterAll(() => {
-    if (zoneBefore === undefined) delete process.env['TZ'];
-    else process.env['TZ'] = zoneBefore;
-  });
-
-  it('really runs in that zone', () => {
-    expect(new Date(2026, 0, 15).getTimezoneOffset()).toBe(januaryOffset);
-    expect(new Date(2026, 6, 15).getTimezoneOffset()).toBe(julyOffset);
+describeInEachProcessZone(() => {
+  beforeAll(async () => {
+    dates = await import('#shared/kernel/recurrence-dates.ts');
   });
 
   it.each(examples)('gives the dates of $id, $title', (example) => {
@@ -58,15 +44,15 @@ describe.each([
     const lastOn = example.exp.at(-1) ?? startsOn;
     const toOn = example.complete ? addDays(lastOn, 366) : lastOn;
     const set = recurrence(example.rrule, startsOn);
-    expect(value(recurrenceDays(set, startsOn, toOn, NEW_YORK))).toEqual(example.exp);
-    const times = value(recurrenceTimes(set, clock, NEW_YORK, startsOn, toOn));
+    expect(value(dates.recurrenceDays(set, startsOn, toOn, NEW_YORK))).toEqual(example.exp);
+    const times = value(dates.recurrenceTimes(set, clock, NEW_YORK, startsOn, toOn));
     expect(times.map(({ on }) => on)).toEqual(example.exp);
   });
 
   it('keeps nine o’clock in New York over the end of summer time', () => {
     // RFC 5545 3.8.5.3, daily until 24 December 1997: EDT to 25 October, EST from 26 October.
     const set = recurrence('FREQ=DAILY;UNTIL=19971224T000000Z', '1997-09-02');
-    const times = value(recurrenceTimes(set, '09:00', NEW_YORK, '1997-10-25', '1997-10-26'));
+    const times = value(dates.recurrenceTimes(set, '09:00', NEW_YORK, '1997-10-25', '1997-10-26'));
     expect(times.map(({ at }) => toIso(at))).toEqual([
       '1997-10-25T13:00:00.000Z',
       '1997-10-26T14:00:00.000Z',
@@ -113,7 +99,7 @@ describe.each([
   it('finds the last weekday of each month of 2026', () => {
     // Reckoned from the calendar of 2026, whose 1 January is a Thursday.
     const set = recurrence('FREQ=MONTHLY;BYDAY=MO,TU,WE,TH,FR;BYSETPOS=-1', '2026-01-01');
-    expect(value(recurrenceDays(set, '2026-01-01', '2026-12-31', LONDON))).toEqual([
+    expect(value(dates.recurrenceDays(set, '2026-01-01', '2026-12-31', LONDON))).toEqual([
       '2026-01-30',
       '2026-02-27',
       '2026-03-31',
@@ -132,7 +118,8 @@ describe.each([
   it('ends with the day, the wall time or the instant that the rule names, itself included', () => {
     const lastOf = (until: string, clock: ClockTime) => {
       const set = recurrence(`FREQ=DAILY;UNTIL=${until}`, '2026-06-01');
-      return value(recurrenceTimes(set, clock, LONDON, '2026-06-01', '2026-07-01')).at(-1)?.on;
+      return value(dates.recurrenceTimes(set, clock, LONDON, '2026-06-01', '2026-07-01')).at(-1)
+        ?.on;
     };
     expect(lastOf('20260610', '23:30')).toBe('2026-06-10');
     expect(lastOf('20260610T100000', '10:00')).toBe('2026-06-10');
@@ -142,7 +129,7 @@ describe.each([
     expect(lastOf('20260610T085900Z', '10:00')).toBe('2026-06-09');
     // Half past midnight in London on the 11th.
     const set = recurrence('FREQ=DAILY;UNTIL=20260610T233000Z', '2026-06-01');
-    const days = value(recurrenceDays(set, '2026-06-01', '2026-07-01', LONDON));
+    const days = value(dates.recurrenceDays(set, '2026-06-01', '2026-07-01', LONDON));
     expect(days.at(-1)).toBe('2026-06-11');
   });
 });
@@ -157,7 +144,7 @@ function isoTimes(
   fromOn: CalendarDay,
   toOn: CalendarDay,
 ): string[] {
-  return value(recurrenceTimes(set, clock, LONDON, fromOn, toOn)).map(({ at }) => toIso(at));
+  return value(dates.recurrenceTimes(set, clock, LONDON, fromOn, toOn)).map(({ at }) => toIso(at));
 }
 
 function value<Granted>(verdict: Verdict<Granted, unknown>): Granted {

@@ -1,3 +1,4 @@
+import { SelectArrow } from './select-arrow.tsx';
 import type { ReactNode } from 'react';
 import { useId } from 'react';
 
@@ -136,15 +137,7 @@ export function ChoiceField(
               </option>
             ))}
           </select>
-          <svg
-            className="pointer-events-none absolute top-1/2 right-3 -translate-y-1/2"
-            viewBox="0 0 10 5"
-            width="10"
-            height="5"
-            aria-hidden
-          >
-            <path className="fill-ink" d="M0 0H10L5 5Z" />
-          </svg>
+          <SelectArrow />
         </span>
       )}
     </Labelled>

@@ -1,3 +1,5 @@
+import { SelectArrow } from './select-arrow.tsx';
+
 /** One of a few, chosen from a list; its name is spoken and not shown. */
 export function Select(props: {
   readonly name: string;
@@ -19,15 +21,7 @@ export function Select(props: {
           </option>
         ))}
       </select>
-      <svg
-        className="pointer-events-none absolute top-1/2 right-3 -translate-y-1/2"
-        viewBox="0 0 10 5"
-        width="10"
-        height="5"
-        aria-hidden
-      >
-        <path className="fill-ink" d="M0 0H10L5 5Z" />
-      </svg>
+      <SelectArrow />
     </span>
   );
 }

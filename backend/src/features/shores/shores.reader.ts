@@ -1,29 +1,16 @@
 import type { Read } from '#backend/database/transaction.ts';
 import type { TideDifferences } from '#shared/domain/tides/differences.ts';
+import type { ShoreRules } from '#shared/domain/tides/shore-water.ts';
 import type { ShoreId } from '#shared/kernel/ids.ts';
-import type { ClockTime } from '#shared/kernel/time.ts';
 
 /** A shore with its settings; heights above the chart datum of its tide station, in metres. */
-export interface Shore {
+export interface Shore extends ShoreRules {
   readonly id: ShoreId;
   readonly name: string;
-  readonly zone: string;
-  readonly latitude: number;
-  readonly longitude: number;
   readonly tideStationId: string;
   readonly differences: TideDifferences;
   readonly lowestTideM: number;
   readonly highestTideM: number;
-  readonly workingLevelM: number;
-  readonly cutOffLevelM: number;
-  readonly minutesBeforeLow: number;
-  readonly minutesAfterLow: number;
-  readonly daylightMarginMinutes: number;
-  readonly minimumMinutes: number;
-  readonly earliestClock: ClockTime;
-  readonly latestClock: ClockTime;
-  readonly crewMeetsMinutes: number;
-  readonly partyMeetsMinutes: number;
   readonly meetingPlace: string;
   readonly hazards: string;
   readonly waysOff: string;
