@@ -135,6 +135,18 @@ describe('an official table', () => {
     expect(await tables()).toEqual([]);
   });
 
+  it('with time and height the wrong way round in some rows names them, and in its heading says so', async () => {
+    const lines = printed().split('\n');
+    lines[9] = (lines[9] ?? '').replace(/,(\d\d:\d\d),(-?[\d.]+),/, ',$2,$1,');
+    const rows = await preview(lines.join('\n'));
+    expect(rows.problems.map(({ row }) => row)).toEqual([10]);
+    const heading = await preview(printed().replace('Time,Height', 'Height,Time'));
+    expect(heading.problems).toMatchObject([
+      { row: 1, message: expect.stringContaining('time and height the other way round') as string },
+    ]);
+    expect(await tables()).toEqual([]);
+  });
+
   it('of 30 MB is refused before it is read', async () => {
     const reply = await coordinator.post('/api/tide-tables/preview', wish('x'.repeat(30_000_000)));
     expect(problem.parse(reply.body)).toMatchObject({ status: 413, code: 'too-large' });

@@ -4,7 +4,7 @@ import { tideStations } from '#backend/platform/tides/tide-stations.ts';
 import { datesRoundClockChanges } from '#shared/domain/tides/official-table-clock-changes.ts';
 import { compareWithPrediction } from '#shared/domain/tides/official-table-comparison.ts';
 import { curveByTable } from '#shared/domain/tides/official-table-curve.ts';
-import type { OfficialTable, TableEvent } from '#shared/domain/tides/official-table-reading.ts';
+import type { OfficialTable } from '#shared/domain/tides/official-table-reading.ts';
 import { readOfficialTable } from '#shared/domain/tides/official-table.ts';
 import { tideCurve } from '#shared/domain/tides/prediction.ts';
 import { windowOn } from '#shared/domain/tides/shore-water.ts';
@@ -116,42 +116,65 @@ describe('the annual table of NOAA for Seattle, 2017, uploaded as it is', () => 
   });
 });
 
-describe('windows by a table of the prediction’s own highs and lows, rounded as tables are', () => {
-  it('are those of the prediction within 3 minutes, over a year', async () => {
+describe('windows by a table', () => {
+  it('of the prediction’s own highs and lows, rounded as tables are, are its own within 3 minutes over a year', async () => {
     const curve = await seattle();
     const fromAt = instantOf('2027-01-01', '00:00', PACIFIC);
     const toAt = instantOf('2028-01-01', '00:00', PACIFIC);
-    const events = curve.extremes(fromAt, toAt).map(({ at, kind, heightM }, place): TableEvent => ({
+    const events = curve.extremes(fromAt, toAt).map(({ at, kind, heightM }) => ({
       at: Math.round(at / MINUTE_MS) * MINUTE_MS,
       kind,
       heightM: Math.round(heightM * 100) / 100,
-      row: place + 1,
     }));
-    const bent = curveByTable(curve, events);
-    let both = 0;
-    let worst = 0;
-    const onlyOne: string[] = [];
-    for (let on: CalendarDay = '2027-01-02'; on < '2027-12-31'; on = addDays(on, 1)) {
-      const direct = windowOn(shore, curve, on);
-      const table = windowOn(shore, bent, on);
-      if (!direct.isGranted || !table.isGranted) {
-        if (direct.isGranted !== table.isGranted) onlyOne.push(on);
-        continue;
-      }
-      both += 1;
-      for (const time of ['startsAt', 'endsAt', 'lowWaterAt', 'offTheShoreBy'] as const) {
-        worst = Math.max(worst, Math.abs(direct.value[time] - table.value[time]) / MINUTE_MS);
-      }
-    }
+    const { days, minutes, onlyOne } = windowsApart(curve, curveByTable(curve, events), 2027);
     console.info(
-      `Windows by a rounded table: ${both} days, ${worst} min apart at the worst; ` +
-        `by one only: ${onlyOne.join(', ') || 'none'}`,
+      `by a rounded table: ${days} days, ${said(minutes)}; by one only: ${onlyOne.length}`,
     );
-    expect(both).toBeGreaterThan(60);
-    expect(worst).toBeLessThanOrEqual(3);
+    expect(days).toBeGreaterThan(60);
+    expect(minutes.at(-1)).toBeLessThanOrEqual(3);
     expect(onlyOne).toEqual([]);
   });
+
+  it('of NOAA for Seattle, 2017, are those of the prediction within 3 minutes at the median, 12 at the worst', async () => {
+    const curve = await seattle();
+    const bent = curveByTable(curve, tableIn(PACIFIC).events);
+    const { days, minutes, onlyOne } = windowsApart(curve, bent, 2017);
+    console.info(
+      `by the table of Seattle: ${days} days, ${said(minutes)}; by one only: ${onlyOne.length}`,
+    );
+    expect(days).toBeGreaterThan(60);
+    expect(minutes[Math.floor(minutes.length / 2)]).toBeLessThanOrEqual(3);
+    expect(minutes.at(-1)).toBeLessThanOrEqual(12);
+    // A table some centimetres off may grant a day at the very edge of the rules, or not.
+    expect(onlyOne.length).toBeLessThan(days / 20);
+  });
 });
+
+/** How far apart the windows of a year are by two curves: every edge and low water, in order. */
+function windowsApart(one: TideCurve, other: TideCurve, year: number) {
+  const minutes: number[] = [];
+  const onlyOne: string[] = [];
+  let days = 0;
+  // A day from either end of the year, where a table hands over to the prediction.
+  const lastOn: CalendarDay = `${year}-12-30`;
+  for (let on: CalendarDay = `${year}-01-02`; on <= lastOn; on = addDays(on, 1)) {
+    const [a, b] = [windowOn(shore, one, on), windowOn(shore, other, on)];
+    if (!a.isGranted || !b.isGranted) {
+      if (a.isGranted !== b.isGranted) onlyOne.push(on);
+      continue;
+    }
+    days += 1;
+    for (const time of ['startsAt', 'endsAt', 'lowWaterAt', 'offTheShoreBy'] as const) {
+      minutes.push(Math.abs(a.value[time] - b.value[time]) / MINUTE_MS);
+    }
+  }
+  return { days, minutes: minutes.sort((x, y) => x - y), onlyOne };
+}
+
+function said(minutes: readonly number[]): string {
+  const median = minutes[Math.floor(minutes.length / 2)] ?? NaN;
+  return `${median} min (median), ${minutes.at(-1) ?? NaN} min (worst)`;
+}
 
 const shore: ShoreRules = {
   zone: PACIFIC,

@@ -45,7 +45,14 @@ const DAY_STYLES: Readonly<Record<DayStyle, string>> = {
 
 /** Whether the text is a real date of the calendar, strictly 'YYYY-MM-DD', year 1000 to 9999. */
 export function isCalendarDay(text: string): text is CalendarDay {
-  return DAY_TEXT.test(text) && dayjs.utc(text).format('YYYY-MM-DD') === text;
+  return realMidnightUtc(text) !== null;
+}
+
+/** The beginning of the day in UTC; null where there is no such day. */
+function realMidnightUtc(text: string): dayjs.Dayjs | null {
+  if (!DAY_TEXT.test(text)) return null;
+  const midnight = dayjs.utc(text);
+  return midnight.format('YYYY-MM-DD') === text ? midnight : null;
 }
 
 /** Whether the text is strictly 'HH:MM' from 00:00 to 23:59; 24:00 is not. */
@@ -134,9 +141,7 @@ export function clockAt(at: Instant, zone: string): ClockTime {
  * instant shown as 03:30), and a time that they show twice means the first.
  */
 export function instantOf(day: CalendarDay, clock: ClockTime, zone: string): Instant {
-  if (!isClockTime(clock)) throw new RangeError(`Not a clock time: '${String(clock)}'`);
-  const [hours, minutes] = clock.split(':').map(Number) as [number, number];
-  const wallMs = midnightUtc(day).valueOf() + hours * HOUR_MS + minutes * MINUTE_MS;
+  const wallMs = wallMsOf(day, clock);
   const offsetBeforeMs = offsetMs(wallMs - WIDEST_OFFSET_MS, zone);
   const offsetAfterMs = offsetMs(wallMs + WIDEST_OFFSET_MS, zone);
   const showings = [wallMs - offsetBeforeMs, wallMs - offsetAfterMs].filter(
@@ -145,10 +150,17 @@ export function instantOf(day: CalendarDay, clock: ClockTime, zone: string): Ins
   return showings.length === 0 ? wallMs - offsetBeforeMs : Math.min(...showings);
 }
 
+/** A day and time as if its clock were that of UTC. */
+function wallMsOf(day: CalendarDay, clock: ClockTime): number {
+  if (!isClockTime(clock)) throw new RangeError(`Not a clock time: '${String(clock)}'`);
+  const [hours, minutes] = clock.split(':').map(Number) as [number, number];
+  return midnightUtc(day).valueOf() + hours * HOUR_MS + minutes * MINUTE_MS;
+}
+
 /** Whether clocks in the zone ever show this time on this day; false inside a gap. */
 export function existsOnClock(day: CalendarDay, clock: ClockTime, zone: string): boolean {
   const at = instantOf(day, clock, zone);
-  return dayAt(at, zone) === day && clockAt(at, zone) === clock;
+  return at + offsetMs(at, zone) === wallMsOf(day, clock);
 }
 
 /**
@@ -224,14 +236,15 @@ export function formatDay(day: CalendarDay, style: DayStyle): string {
 }
 
 function midnightUtc(day: CalendarDay): dayjs.Dayjs {
-  if (!isCalendarDay(day)) throw new RangeError(`Not a calendar day: '${String(day)}'`);
-  return dayjs.utc(day);
+  const midnight = realMidnightUtc(day);
+  if (midnight === null) throw new RangeError(`Not a calendar day: '${day}'`);
+  return midnight;
 }
 
 function dayOf(moment: dayjs.Dayjs): CalendarDay {
   const text = moment.format('YYYY-MM-DD');
-  if (!isCalendarDay(text)) throw new RangeError(`Outside the years 1000 to 9999: '${text}'`);
-  return text;
+  if (!DAY_TEXT.test(text)) throw new RangeError(`Outside the years 1000 to 9999: '${text}'`);
+  return text as CalendarDay;
 }
 
 function whole(count: number): number {

@@ -43,16 +43,46 @@ function crossing(
 ): Instant {
   let belowAt = lowAt;
   for (const turnAt of turnsAt) {
-    if (curve.heightAtM(turnAt) > levelM) {
-      let aboveAt = turnAt;
-      while (Math.abs(aboveAt - belowAt) > CROSSING_MS) {
-        const middleAt = (aboveAt + belowAt) / 2;
-        if (curve.heightAtM(middleAt) > levelM) aboveAt = middleAt;
-        else belowAt = middleAt;
-      }
-      return belowAt;
+    const turnAboveM = curve.heightAtM(turnAt) - levelM;
+    if (turnAboveM > 0) {
+      return lastBelow(curve, levelM, belowAt, { at: turnAt, aboveM: turnAboveM });
     }
     belowAt = turnAt;
+  }
+  return belowAt;
+}
+
+/**
+ * The last moment at or below the level on the way from one below to one above, the water only
+ * rising or falling between. Regula falsi, the weight of the end that stays halved at every step so
+ * that both ends close in: a few heights where bisection takes seventeen.
+ */
+function lastBelow(
+  curve: TideCurve,
+  levelM: number,
+  fromAt: Instant,
+  turn: { readonly at: Instant; readonly aboveM: number },
+): Instant {
+  let belowAt = fromAt;
+  let belowM = curve.heightAtM(fromAt) - levelM;
+  let aboveAt = turn.at;
+  let { aboveM } = turn;
+  while (Math.abs(aboveAt - belowAt) > CROSSING_MS) {
+    const share = aboveM > belowM ? -belowM / (aboveM - belowM) : 0.5;
+    // Never so near an end that the span would not shrink by a part of the precision.
+    const leastShare = CROSSING_MS / 4 / Math.abs(aboveAt - belowAt);
+    const at =
+      belowAt + (aboveAt - belowAt) * Math.min(1 - leastShare, Math.max(leastShare, share));
+    const heightM = curve.heightAtM(at) - levelM;
+    if (heightM > 0) {
+      aboveAt = at;
+      aboveM = heightM;
+      belowM /= 2;
+    } else {
+      belowAt = at;
+      belowM = heightM;
+      aboveM /= 2;
+    }
   }
   return belowAt;
 }
