@@ -5,6 +5,7 @@ import { LoadingWash } from './components/loading-wash.tsx';
 import { accountQueries } from './features/account/account.queries.ts';
 import { ErrorPage } from './routes/error.tsx';
 import { NotFoundPage } from './routes/not-found.tsx';
+import { PlannersOnly } from './routes/planners-only.tsx';
 import { SignedIn } from './routes/signed-in.tsx';
 
 /** Where somebody signs in who was on the way to a page of this site. */
@@ -42,9 +43,15 @@ export function routes(queryClient: QueryClient): RouteObject[] {
           children: [
             { index: true, lazy: () => import('./routes/calendar.tsx') },
             { path: '/sessions/:sessionId', lazy: () => import('./routes/session.tsx') },
-            { path: '/season-plans', lazy: () => import('./routes/season-plans.tsx') },
-            { path: '/season-plans/new', lazy: () => import('./routes/season-plan.tsx') },
-            { path: '/season-plans/:planId', lazy: () => import('./routes/season-plan.tsx') },
+            {
+              path: '/season-plans',
+              Component: PlannersOnly,
+              children: [
+                { index: true, lazy: () => import('./routes/season-plans.tsx') },
+                { path: 'new', lazy: () => import('./routes/season-plan.tsx') },
+                { path: ':planId', lazy: () => import('./routes/season-plan.tsx') },
+              ],
+            },
             { path: '/shores', lazy: () => import('./routes/shores.tsx') },
             { path: '/shores/new', lazy: () => import('./routes/shore.tsx') },
             { path: '/shores/:shoreId', lazy: () => import('./routes/shore.tsx') },

@@ -77,6 +77,15 @@ describe('the season plans', () => {
     expect(screen.getByRole('link', { name: 'Shores' })).not.toHaveAttribute('aria-current');
   });
 
+  it.each(['/season-plans', '/season-plans/new', opened])(
+    'tell a volunteer who comes to %s who plans, and ask the server for nothing',
+    async (address) => {
+      const { asked } = openPage(address, { ...server, seeAccount: () => account() });
+      expect(await screen.findByText(/Coordinators plan the season\./)).toBeInTheDocument();
+      expect(asked.map(({ endpoint }) => endpoint)).toEqual(['seeAccount']);
+    },
+  );
+
   it('are no way in the navigation for a volunteer, who still sees the shores', async () => {
     openPage('/', {
       seeAccount: () => account(),
