@@ -128,6 +128,20 @@ describe('a shore', () => {
   });
 });
 
+describe('what is wrong with a shore', () => {
+  it.each([
+    [{ latitude: 91 }, 'At most 90.'],
+    [{ latitude: 'north' }, 'Write a number.'],
+    [{ crewMeetsMinutes: -1 }, 'At least 0.'],
+    [{ ratioPreset: 'none' }, 'Choose one of those offered.'],
+    [{ meetingPlace: 'x'.repeat(501) }, 'Write at most 500 characters.'],
+    [{ zone: 'Europe/Skerrow' }, 'Write a time zone like Europe/London'],
+  ])('is said in plain words, the contract’s own first: %j', async (change, message) => {
+    const reply = await coordinator.post('/api/shores', { ...settings, name: 'Z', ...change });
+    expect(problem.parse(reply.body).fields?.map((field) => field.message)).toEqual([message]);
+  });
+});
+
 describe('tide stations', () => {
   it('are offered nearest first, each with its credit, none without a licence for it', async () => {
     const reply = await coordinator.get('/api/tide-stations?latitude=55.06&longitude=-1.18');

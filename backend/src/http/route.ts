@@ -6,7 +6,7 @@ import type { PersonId } from '#shared/kernel/ids.ts';
 import type { Action, policy, Role } from '#shared/policy/policy.ts';
 import { may } from '#shared/policy/policy.ts';
 import { Problem } from './problem.ts';
-import { isOwnWording, sayIssue } from './say-issue.ts';
+import { sayIssue } from './say-issue.ts';
 import type { SignIn } from './sign-in.ts';
 
 /** Who is asking. Roles are read from the database at every request. */
@@ -85,13 +85,13 @@ export function route<const C extends Contract, Tried extends Action>(
 function parse(contract: Contract, request: Request) {
   const fields: FieldError[] = [];
   const read = (where: FieldError['where'], schema: z.ZodType, value: unknown): unknown => {
-    const result = schema.safeParse(value);
+    const result = schema.safeParse(value, { error: sayIssue });
     if (result.success) return result.data;
     for (const issue of result.error.issues) {
       fields.push({
         where,
         field: issue.path.join('.'),
-        message: isOwnWording(issue) ? issue.message : sayIssue(issue),
+        message: issue.message,
       });
     }
     return undefined;

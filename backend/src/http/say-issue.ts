@@ -1,12 +1,12 @@
 import type { z } from 'zod';
 
-type Issue = z.core.$ZodIssue;
+type Issue = z.core.$ZodRawIssue;
 
 /**
- * What is wrong with one value, as a sentence to stand beside its field. A contract's own words
- * win; these are for the plain cases that every contract has.
+ * What is wrong with one value, as a sentence to stand beside its field, for the plain cases that
+ * every contract has. Given to zod as the words of a parse: a contract's own words win over them.
  */
-export function sayIssue(issue: Issue): string {
+export function sayIssue(issue: Issue): string | undefined {
   switch (issue.code) {
     case 'too_big':
       return issue.origin === 'string'
@@ -31,11 +31,6 @@ export function sayIssue(issue: Issue): string {
     case 'invalid_format':
       return 'This is not written in the form that is asked for.';
     default:
-      return issue.message;
+      return undefined;
   }
-}
-
-/** Whether the words of an issue are a contract's own, and not those that zod makes up. */
-export function isOwnWording(issue: Issue): boolean {
-  return !/^(Invalid|Too|Unrecognized|Expected)\b/.test(issue.message);
 }

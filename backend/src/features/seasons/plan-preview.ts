@@ -12,6 +12,7 @@ import { planDates } from '#shared/domain/seasons/season-plan.ts';
 import type { PlanDate, PlanRefusal, SeasonPlan } from '#shared/domain/seasons/season-plan.ts';
 import type { CalendarDay } from '#shared/kernel/time.ts';
 import { sayPatternRefusal } from './say-pattern-refusal.ts';
+import { windowRulesOf } from './seasons.reader.ts';
 import type { PlanValues } from './seasons.reader.ts';
 
 const datesReadBack = 5;
@@ -68,15 +69,7 @@ function seasonPlan(values: PlanValues, pattern: Pattern): SeasonPlan {
     pattern,
     fromOn,
     toOn,
-    windowRules: {
-      planLevelM: values.lowestLevelM,
-      earliestClock: values.earliestClock,
-      latestClock: values.latestClock,
-      minutesBeforeLow: values.minutesBeforeLow,
-      minutesAfterLow: values.minutesAfterLow,
-      daylightMarginMinutes: values.daylightMarginMinutes,
-      minimumMinutes: values.minimumMinutes,
-    },
+    windowRules: windowRulesOf(values),
     exceptions: values.exceptions.map(({ on, kind, reason }) => {
       const said = { on, reason: reason ?? '' };
       return kind === 'add' ? { kind, ...said, isByHand: true } : { kind, ...said };

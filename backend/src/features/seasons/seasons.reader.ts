@@ -1,4 +1,5 @@
 import type { Read } from '#backend/database/transaction.ts';
+import type { PlanWindowRules } from '#shared/domain/seasons/plan-window.ts';
 import type { SeasonPlanId, SessionId, ShoreId, SlotKindId } from '#shared/kernel/ids.ts';
 import type { CalendarDay, ClockTime } from '#shared/kernel/time.ts';
 
@@ -23,6 +24,19 @@ export interface PlanValues {
     readonly kind: 'skip' | 'take' | 'add';
     readonly reason: string | null;
   }[];
+}
+
+/** What a plan asks of its windows beyond its shore. */
+export function windowRulesOf(plan: PlanValues): PlanWindowRules {
+  return {
+    planLevelM: plan.lowestLevelM,
+    earliestClock: plan.earliestClock,
+    latestClock: plan.latestClock,
+    minutesBeforeLow: plan.minutesBeforeLow,
+    minutesAfterLow: plan.minutesAfterLow,
+    daylightMarginMinutes: plan.daylightMarginMinutes,
+    minimumMinutes: plan.minimumMinutes,
+  };
 }
 
 /** A session made of a plan. */

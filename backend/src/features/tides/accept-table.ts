@@ -2,12 +2,13 @@ import type { AppContext, Tx } from '#backend/app-context.ts';
 import { databaseError } from '#backend/database/transaction.ts';
 import { Problem } from '#backend/http/problem.ts';
 import type { Actor } from '#backend/http/route.ts';
+import { mayAcceptTable } from '#shared/domain/tides/official-table-acceptance.ts';
 import type { TrailEntry } from '#shared/domain/trail/trail-line.ts';
 import type { SessionId, TideTableId } from '#shared/kernel/ids.ts';
 import { toIso } from '#shared/kernel/time.ts';
-import { mayAccept } from './may-accept.ts';
 import { readTable } from './read-table.ts';
 import type { TableMove, TableWish } from './read-table.ts';
+import { sayAcceptance } from './say-table.ts';
 import { insertTable, markTakenBack, moveToWindow } from './tide-tables.repository.ts';
 
 /**
@@ -25,8 +26,8 @@ export async function acceptTable(
   return refusingClashes(() =>
     ctx.inTransaction(async (tx) => {
       const read = await readTable(ctx, tx, wish);
-      const verdict = mayAccept(read, wish.leavesOutProblems);
-      if (!verdict.isGranted) throw new Problem('table-refused', verdict.reasons[0]);
+      const verdict = mayAcceptTable({ ...read, leavesOutProblems: wish.leavesOutProblems });
+      if (!verdict.isGranted) throw new Problem('table-refused', sayAcceptance(verdict.reasons[0]));
       const { events } = verdict.value;
       const id = ctx.newId<TideTableId>();
       await insertTable(tx, {

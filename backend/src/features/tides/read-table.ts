@@ -1,6 +1,6 @@
 import type { AppContext } from '#backend/app-context.ts';
 import type { Read } from '#backend/database/transaction.ts';
-import { readPlan } from '#backend/features/seasons/seasons.reader.ts';
+import { readPlan, windowRulesOf } from '#backend/features/seasons/seasons.reader.ts';
 import { readShores } from '#backend/features/shores/shores.reader.ts';
 import type { Shore } from '#backend/features/shores/shores.reader.ts';
 import { Problem } from '#backend/http/problem.ts';
@@ -143,18 +143,7 @@ async function windowAfter(
 ): Promise<WorkingWindow | null> {
   if (moved.newLowWaterAt === null) return null;
   const plan = session.seasonPlanId === null ? null : await readPlan(read, session.seasonPlanId);
-  const rules: ShoreRules =
-    plan === null
-      ? shore
-      : narrowedRules(shore, {
-          planLevelM: plan.lowestLevelM,
-          earliestClock: plan.earliestClock,
-          latestClock: plan.latestClock,
-          minutesBeforeLow: plan.minutesBeforeLow,
-          minutesAfterLow: plan.minutesAfterLow,
-          daylightMarginMinutes: plan.daylightMarginMinutes,
-          minimumMinutes: plan.minimumMinutes,
-        });
+  const rules: ShoreRules = plan === null ? shore : narrowedRules(shore, windowRulesOf(plan));
   const verdict = windowTakenByHand(rules, curve, dayAt(moved.newLowWaterAt, shore.zone));
   return verdict.isGranted ? verdict.value.window : null;
 }

@@ -1,3 +1,4 @@
+import type { AcceptanceReason } from '#shared/domain/tides/official-table-acceptance.ts';
 import type { TableComparison } from '#shared/domain/tides/official-table-comparison.ts';
 import type { TableRefusal } from '#shared/domain/tides/official-table-reading.ts';
 
@@ -52,5 +53,19 @@ export function sayComparison(comparison: TableComparison): string {
       return 'Its high waters are lower than its low waters: the marks look exchanged.';
     case 'other-place':
       return 'Its times or heights are too far from the prediction: it looks like the table of another place.';
+  }
+}
+
+/** One sentence on why a table may not be put in force. */
+export function sayAcceptance(reason: AcceptanceReason): string {
+  switch (reason.why) {
+    case 'not-read':
+      return sayTableRefusal(reason.refusal);
+    case 'too-few-events':
+      return 'There are too few high and low waters in it.';
+    case 'looks-like-a-mistake':
+      return sayComparison(reason.comparison);
+    case 'rows-in-doubt':
+      return 'Some rows could not be read. Mend them, or say that they are left out.';
   }
 }

@@ -2,10 +2,10 @@ import type { z } from 'zod';
 import type { Shore } from '#backend/features/shores/shores.reader.ts';
 import type { StationFacts } from '#backend/platform/tides/tide-stations.ts';
 import type { seeTables, TablePreview } from '#shared/contracts/tide-tables.ts';
+import { mayAcceptTable } from '#shared/domain/tides/official-table-acceptance.ts';
 import { datesRoundClockChanges } from '#shared/domain/tides/official-table-clock-changes.ts';
 import type { OfficialTable, TableZone } from '#shared/domain/tides/official-table-reading.ts';
 import { dayAt, toIso, yearOf } from '#shared/kernel/time.ts';
-import { mayAccept } from './may-accept.ts';
 import type { TableMove, TableRead } from './read-table.ts';
 import { sayComparison, sayTableRefusal } from './say-table.ts';
 import { presentHeightM } from './tides.presenter.ts';
@@ -38,7 +38,7 @@ export function presentTablePreview(read: TableRead): TablePreview {
           },
     clockChanges: value === null ? [] : presentClockChanges(value, zone, station.zone),
     movedSessions: read.moves.map(presentMove),
-    mayAccept: mayAccept(read, true).isGranted,
+    mayAccept: mayAcceptTable({ table, comparison, leavesOutProblems: true }).isGranted,
   };
 }
 
